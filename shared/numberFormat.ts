@@ -1,0 +1,35 @@
+/**
+ * How numbers are written, on the screen, in print and in sentences: three to four significant figures,
+ * thousands apart by a narrow no-break space (U+202F), always with the unit.
+ */
+import { toShown, unitOf, type QuantityKind } from './units.ts'
+
+const narrowSpace = '\u202F'
+/** Written where there is no number: state not reached, not defined. */
+export const noNumber = '–'
+
+/** `digits` significant figures; thousands grouped from 10 000 on by default; never exponent notation above 1e-7. */
+export function formatNumber(value: number | null | undefined, digits = 4): string {
+  if (value === null || value === undefined || !Number.isFinite(value)) return noNumber
+  if (value === 0) return '0'
+  const magnitude = Math.floor(Math.log10(Math.abs(Number(value.toPrecision(digits)))))
+  if (magnitude < -7 || magnitude > 14) return value.toExponential(digits - 1)
+  const decimals = Math.max(0, digits - 1 - magnitude)
+  const [whole, fraction] = Math.abs(value).toFixed(decimals).split('.')
+  const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, narrowSpace) : whole
+  const sign = value < 0 ? '\u2212' : ''
+  return sign + grouped + (fraction === undefined ? '' : `.${fraction}`)
+}
+
+/** A stored number (N, mm, MPa ...) in the unit shown for its kind, without the unit. */
+export function formatQuantity(kind: QuantityKind, stored: number | null | undefined, digits = 4): string {
+  return stored === null || stored === undefined ? noNumber : formatNumber(toShown(kind, stored), digits)
+}
+
+/** The same with its unit. */
+export function formatWithUnit(kind: QuantityKind, stored: number | null | undefined, digits = 4): string {
+  const text = formatQuantity(kind, stored, digits)
+  const unit = unitOf(kind)
+  if (text === noNumber || unit === '') return text
+  return unit === '°' ? text + unit : `${text}${narrowSpace}${unit}`
+}
