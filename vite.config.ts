@@ -17,7 +17,6 @@ export default defineConfig({
   test: {
     projects: [
       {
-        extends: false,
         resolve: { alias },
         test: {
           name: 'unit',
@@ -26,7 +25,6 @@ export default defineConfig({
         },
       },
       {
-        extends: false,
         resolve: { alias },
         plugins: [vue(), vuetify({ autoImport: true })],
         test: {
@@ -38,11 +36,9 @@ export default defineConfig({
         },
       },
       {
-        extends: false,
         test: { name: 'reference', environment: 'node', include: ['tests/reference/**/*.test.ts'] },
       },
       {
-        extends: false,
         test: {
           name: 'api',
           environment: 'node',
@@ -52,7 +48,6 @@ export default defineConfig({
         },
       },
       {
-        extends: false,
         test: {
           name: 'e2e',
           environment: 'node',
