@@ -9,26 +9,43 @@ import type { MomentCurvatureResult } from './document/analysisResult.ts'
 import type { ErrorCode } from './errors.ts'
 
 export const paths = {
+  /** GET: Health, public. */
   health: '/api/health',
+  /** POST SignIn: User, and the cookie. */
   signIn: '/api/sign-in',
+  /** POST: 204. */
   signOut: '/api/sign-out',
   /** GET: who is signed in, 401 when nobody is. */
   session: '/api/session',
+  /** POST PasswordChange: 204; every other session of this person ends. */
   password: '/api/account/password',
+  /** PATCH AccountPatch: User. */
   account: '/api/account',
+  /** GET: Page<User>; POST NewUser: User. Administrators. */
   users: '/api/users',
+  /** PATCH UserPatch: User. Administrators. */
   user: (userId: string) => `/api/users/${userId}`,
+  /** GET: Page<Job>, those that the person may see; POST NewJob: Job. */
   jobs: '/api/jobs',
+  /** GET: Job; PATCH JobPatch with If-Match: Job. */
   job: (jobId: string) => `/api/jobs/${jobId}`,
+  /** GET: Page<Member>. */
   members: (jobId: string) => `/api/jobs/${jobId}/members`,
+  /** PUT MemberRole: Member; DELETE: 204. Administrators. */
   member: (jobId: string, userId: string) => `/api/jobs/${jobId}/members/${userId}`,
+  /** GET: Page<SectionSummary>; POST NewSection: StoredSection. */
   sections: (jobId: string) => `/api/jobs/${jobId}/sections`,
+  /** GET: StoredSection; PUT SectionWrite with If-Match: StoredSection. */
   section: (sectionId: string) => `/api/sections/${sectionId}`,
+  /** GET: Page<SheetSummary>, latest first; POST NewSheet: StoredSheet. */
   sheets: (sectionId: string) => `/api/sections/${sectionId}/sheets`,
+  /** GET: StoredSheet. */
   sheet: (sheetId: string) => `/api/sheets/${sheetId}`,
+  /** GET: Page<SheetLink>, latest first; POST NewLink: CreatedLink. */
   links: (sheetId: string) => `/api/sheets/${sheetId}/links`,
+  /** POST: SheetLink. */
   revokeLink: (linkId: string) => `/api/links/${linkId}/revoke`,
-  /** Public: the token is the key. */
+  /** GET: LinkedSheet. Public: the token is the key. */
   link: (token: string) => `/api/link/${token}`,
 } as const
 
@@ -88,7 +105,16 @@ export const newLinkSchema = z.strictObject({
   expiresAt: z.int(),
 })
 
+/** Longest life of a link, ms: a link outlives neither the check nor the memory of it. */
+export const longestLinkLife = 366 * 24 * 3600 * 1000
+/** Of every list: `?cursor=&limit=`. */
+export const pageLimit = { usual: 50, most: 200 } as const
+
 export type SignIn = z.infer<typeof signInSchema>
+export type PasswordChange = z.infer<typeof passwordSchema>
+export type AccountPatch = z.infer<typeof accountPatchSchema>
+export type JobPatch = z.infer<typeof jobPatchSchema>
+export type MemberRole = z.infer<typeof memberSchema>
 export type NewUser = z.infer<typeof newUserSchema>
 export type UserPatch = z.infer<typeof userPatchSchema>
 export type NewJob = z.infer<typeof newJobSchema>
@@ -212,6 +238,8 @@ export interface Page<T> {
   nextCursor: string | null
 }
 
+export type LinkEnd = 'expired' | 'revoked'
+
 export interface ErrorBody {
   error: {
     code: ErrorCode
@@ -220,6 +248,8 @@ export interface ErrorBody {
     requestId: string
     /** With `conflict`: the stored state. */
     stored?: unknown
+    /** With `link-ended`: how it ended. */
+    ended?: LinkEnd
   }
 }
 
