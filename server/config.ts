@@ -33,7 +33,7 @@ const environmentSchema = z.object({
     .transform((text) => (text === undefined ? null : new URL(text))),
   GIRDWELL_TRUSTED_PROXIES: z.coerce.number().int().min(0).max(10).default(0),
   GIRDWELL_DEMO: z.enum(['on', 'off']).default('on'),
-  GIRDWELL_ADMIN_EMAIL: z.email().trim().toLowerCase().max(200).nullable().default(null),
+  GIRDWELL_ADMIN_EMAIL: z.string().trim().toLowerCase().pipe(z.email()).nullable().default(null),
   GIRDWELL_LOG: z.enum(logLevels).default('warn'),
   GIRDWELL_SOLVER_SECONDS: z.coerce.number().min(1).max(600).default(20),
 })

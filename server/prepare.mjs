@@ -56,7 +56,8 @@ export async function ensureInstalled() {
       'Installing packages; the first time this compiles the database driver and takes about two minutes ...',
     )
     runNpm(
-      ['ci'],
+      // Building needs the development packages, whatever NODE_ENV says.
+      ['ci', '--include=dev'],
       'Installing the packages failed. Look at what npm said above; a package registry must be reachable.',
     )
   }

@@ -58,7 +58,8 @@ const id = z.uuid()
 const title = z.string().trim().min(1, 'Give it a name').max(120)
 const personName = z.string().trim().min(1).max(80)
 const initials = z.string().trim().min(1).max(4)
-const email = z.email().trim().toLowerCase().max(200)
+/** Trimmed before it is judged: a pasted address brings blanks along. */
+const email = z.string().trim().toLowerCase().max(200).pipe(z.email())
 /** NIST SP 800-63B 5.1.1.2: length is what counts; no composition rules. */
 const password = z.string().min(10).max(200)
 

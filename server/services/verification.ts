@@ -86,8 +86,7 @@ export function createVerifier({
 /** Resolves when the thread has loaded the solver, so that loading does not count against the time limit. */
 function startThread(file: URL, onEnd: () => void): Promise<Worker> {
   return new Promise((resolve, reject) => {
-    const fromSource = file.pathname.endsWith('.ts')
-    const worker = new Worker(file, fromSource ? { execArgv: ['--import', 'tsx'] } : {})
+    const worker = createThread(file)
     // An idle thread keeps no process alive.
     worker.unref()
     worker.once('message', () => resolve(worker))
@@ -97,6 +96,12 @@ function startThread(file: URL, onEnd: () => void): Promise<Worker> {
       reject(new Error(`the solver's thread ended with code ${code} before it was ready`))
     })
   })
+}
+
+function createThread(file: URL): Worker {
+  if (!file.pathname.endsWith('.ts')) return new Worker(file)
+  // From source, under tsx or Vitest: a thread inherits no loader, and Node 20 ignores --import in its execArgv.
+  return new Worker(new URL('./verificationThreadFromSource.mjs', import.meta.url), { workerData: file.href })
 }
 
 type Outcome = Extract<ThreadAnswer, { run: number }>
