@@ -54,7 +54,6 @@ export function isSecure(config: Config): boolean {
 }
 
 function openMigrated(config: Config, databaseFile: string | undefined, log: Logger): Database {
-  // Holds names, password hashes and the office's work: for the owner of the process only.
   if (databaseFile === undefined) mkdirSync(config.dataFolder, { recursive: true, mode: 0o700 })
   const database = openDatabase(databaseFile ?? join(config.dataFolder, 'girdwell.sqlite'))
   const outcome = migrateDatabase(database, {

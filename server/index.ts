@@ -10,6 +10,9 @@ import { version } from './version.ts'
 const grace = 3_000
 const day = 24 * 3600 * 1000
 
+// Database and copies hold names, password hashes and the office's work: for the owner of the process only.
+process.umask(0o077)
+
 try {
   await run()
 } catch (failure) {

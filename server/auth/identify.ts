@@ -14,6 +14,7 @@ export function identify(sessions: Sessions): RequestHandler {
 
 /** Who is asking; throws for nobody. Services take what this returns, so a route cannot forget to ask. */
 export function signedIn(response: Response): SignedIn {
+  // Express types what it carries along as `any`; `identify` above is the only writer of this.
   const user = response.locals.signedIn as SignedIn | undefined
   if (user === undefined) throw new NotSignedInError()
   return user

@@ -38,7 +38,9 @@ describe('the server process', () => {
     expect(output.split(demoPassword)).toHaveLength(2)
     for (const { email } of demoAccounts) expect(output).toContain(email)
     // Names, hashes and the office's work are for the owner of the process only.
-    expect(statSync(join(data, 'office')).mode & 0o077).toBe(0)
+    for (const path of ['office', 'office/girdwell.sqlite']) {
+      expect(statSync(join(data, path)).mode & 0o077, path).toBe(0)
+    }
 
     server.child.kill('SIGTERM')
     expect(await server.ended).toBe(0)

@@ -114,6 +114,16 @@ describe('saving a sheet', () => {
     expect(body.error.issues[0].path).toBe('section.spirals[0].pitch')
   })
 
+  it('keeps a result without a curve, where no equilibrium is found', async () => {
+    const document = roundColumn()
+    document.analysis.axialLoad = 100_000_000 // N, about twice what this column can carry
+    const reply = analyse(document)
+    if (reply.status !== 'no-equilibrium') throw new Error(`expected no equilibrium, got ${reply.status}`)
+    const { body } = await ask({ document, seen: toSeen(reply.result) }).expect(201)
+    expect(body.result.stop.reason).toBe('no-equilibrium')
+    expect(body.result.points.moment).toEqual([])
+  })
+
   it('asked twice with the same id makes one', async () => {
     const asked = { id: randomUUID(), number: 'C-102' }
     const first = await ask(asked).expect(201)
@@ -210,6 +220,17 @@ describe('a solver that', () => {
       expect(body.error.message).toContain('0.3 s')
     }
     await apart.close()
+  })
+
+  it('is busy lets so many wait, and tells the next one to come back', async () => {
+    const thread = new URL('../helpers/apiThreadEndless.mjs', import.meta.url)
+    const verifier = createVerifier({ timeLimit: 300, waitingLimit: 2, thread })
+    const waiting = [verifier.analyse({}), verifier.analyse({})].map((run) =>
+      run.catch((cause: Error) => cause.message),
+    )
+    await expect(verifier.analyse({})).rejects.toThrow(/Too many/)
+    for (const message of await Promise.all(waiting)) expect(message).toContain('0.3 s')
+    await verifier.close()
   })
 
   it('dies is an internal fault with its cause withheld', async () => {
