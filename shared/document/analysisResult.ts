@@ -50,8 +50,10 @@ export interface CurvePoints {
   neutralAxisDepth: (number | null)[]
   concreteStrain: number[]
   spiralStrain: Record<string, number[]>
-  barStrainTension: number[]
-  barStrainCompression: number[]
+  /** Most tensioned bar; null in a section without bars. */
+  barStrainTension: (number | null)[]
+  /** Most compressed bar; null in a section without bars. */
+  barStrainCompression: (number | null)[]
   /** N */
   residual: number[]
   iterations: number[]

@@ -1,0 +1,306 @@
+/**
+ * Stress resultants of a section and their tangent, in one pass.
+ *
+ *   strain(v) = eps0 + kappa v          N = sum(sigma A)        M = sum(sigma A v)
+ *
+ * Concrete: two Gauss stations a cell; a cell in which the law has a kink (crack edge, start and end of spalling) is split
+ * there, so that N is smooth while the kink wanders through the cells: without that, the tangent of a softening section
+ * jumps and shows folds that are not there. Bars act at their centres; the concrete they displace is deducted.
+ */
+import { gaussPoint } from '../geometry/stations.ts'
+import type { ConcreteLaw } from './concreteLaw.ts'
+import type { SectionModel } from './sectionModel.ts'
+
+/** Places in the array of resultants. */
+export const axialForce = 0
+export const moment = 1
+/** dN / d eps0 */
+export const axialTangent = 2
+/** dN / d kappa = dM / d eps0 */
+export const couplingTangent = 3
+/** dM / d kappa */
+export const bendingTangent = 4
+export const resultantCount = 5
+
+/** Stress and tangent of the law evaluated last. */
+const answer = new Float64Array(2)
+/** v of the kinks of the law at hand. */
+const kinkV = new Float64Array(8)
+
+/**
+ * Fills `out` (length `resultantCount`; N, N·mm and their derivatives) for the axial strain eps0 at the reference point
+ * and the curvature kappa >= 0 (1/mm).
+ */
+export function computeResultants(model: SectionModel, eps0: number, kappa: number, out: Float64Array): void {
+  out.fill(0)
+  for (const fibers of model.concretes) {
+    accumulateConcrete(model, fibers.law, fibers.area, fibers.ranges, eps0, kappa, out)
+  }
+  accumulateBars(model, eps0, kappa, out)
+}
+
+/** Moment about the other axis (N·mm): sum(sigma A u). */
+export function computeCrossMoment(model: SectionModel, eps0: number, kappa: number): number {
+  const sums = new Float64Array(resultantCount)
+  for (const fibers of model.concretes) {
+    accumulateConcrete(model, fibers.law, fibers.uMoment, fibers.ranges, eps0, kappa, sums)
+  }
+  let cross = sums[axialForce]
+  const { count, v, u, area, steel, displaced } = model.bars
+  for (let i = 0; i < count; i++) {
+    const eps = eps0 + kappa * v[i]
+    evaluateSteel(model, steel[i], eps)
+    const stress = answer[0]
+    evaluateConcrete(model.concretes[displaced[i]].law, eps)
+    cross += (stress - answer[0]) * area[i] * u[i]
+  }
+  return cross
+}
+
+function accumulateBars(model: SectionModel, eps0: number, kappa: number, out: Float64Array): void {
+  const { count, v, area, steel, displaced } = model.bars
+  let N = 0
+  let M = 0
+  let Na = 0
+  let Nk = 0
+  let Mk = 0
+  for (let i = 0; i < count; i++) {
+    const vi = v[i]
+    const eps = eps0 + kappa * vi
+    evaluateSteel(model, steel[i], eps)
+    let stress = answer[0]
+    let tangent = answer[1]
+    if (eps > 0) {
+      evaluateConcrete(model.concretes[displaced[i]].law, eps)
+      stress -= answer[0]
+      tangent -= answer[1]
+    }
+    const force = stress * area[i]
+    const stiffness = tangent * area[i]
+    N += force
+    M += force * vi
+    Na += stiffness
+    Nk += stiffness * vi
+    Mk += stiffness * vi * vi
+  }
+  out[axialForce] += N
+  out[moment] += M
+  out[axialTangent] += Na
+  out[couplingTangent] += Nk
+  out[bendingTangent] += Mk
+}
+
+/** Adds the cells of one law; `weights` are areas, or first moments in u. */
+function accumulateConcrete(
+  model: SectionModel,
+  law: ConcreteLaw,
+  weights: Float64Array,
+  ranges: Int32Array,
+  eps0: number,
+  kappa: number,
+  out: Float64Array,
+): void {
+  const { edges } = model.stations
+  const cells = edges.length - 1
+  const { kinks } = law
+  const spalls = kinks.length > 1
+  // Uniform strain has no kink inside a cell.
+  if (kappa === 0) {
+    if (eps0 > 0 && !(spalls && eps0 >= kinks[kinks.length - 1])) {
+      for (let r = 0; r < ranges.length; r += 2) {
+        accumulateCells(model, law, weights, ranges[r], ranges[r + 1], eps0, kappa, out)
+      }
+    }
+    return
+  }
+  for (let k = 0; k < kinks.length; k++) kinkV[k] = (kinks[k] - eps0) / kappa
+  const crackCell = findCell(edges, kinkV[0])
+  const endCell = spalls ? findCell(edges, kinkV[kinks.length - 1]) : cells
+  for (let r = 0; r < ranges.length; r += 2) {
+    const from = ranges[r]
+    const to = ranges[r + 1]
+    if (crackCell >= from && crackCell < to) {
+      accumulateSplitCell(model, law, weights, crackCell, eps0, kappa, out)
+    }
+    let next = Math.max(from, crackCell + 1)
+    const stop = Math.min(to, endCell)
+    for (let k = 1; k < kinks.length - 1; k++) {
+      const kinkCell = findCell(edges, kinkV[k])
+      if (kinkCell < next || kinkCell >= stop) continue
+      accumulateCells(model, law, weights, next, kinkCell, eps0, kappa, out)
+      accumulateSplitCell(model, law, weights, kinkCell, eps0, kappa, out)
+      next = kinkCell + 1
+    }
+    accumulateCells(model, law, weights, next, stop, eps0, kappa, out)
+    if (spalls && endCell > crackCell && endCell >= from && endCell < to) {
+      accumulateSplitCell(model, law, weights, endCell, eps0, kappa, out)
+    }
+  }
+}
+
+/** Whole cells [from, to), all in compression and none with a kink inside. */
+function accumulateCells(
+  model: SectionModel,
+  law: ConcreteLaw,
+  weights: Float64Array,
+  from: number,
+  to: number,
+  eps0: number,
+  kappa: number,
+  out: Float64Array,
+): void {
+  const { v } = model.stations
+  const { top, inverseWidth, coefficients } = law.table
+  let N = 0
+  let M = 0
+  let Na = 0
+  let Nk = 0
+  let Mk = 0
+  for (let s = 2 * from; s < 2 * to; s++) {
+    const weight = weights[s]
+    if (weight === 0) continue
+    const vs = v[s]
+    const eps = eps0 + kappa * vs
+    let stress: number
+    let tangent: number
+    if (eps <= top) {
+      const place = eps * inverseWidth
+      const piece = place | 0
+      const t = place - piece
+      const c = 4 * piece
+      const c2 = coefficients[c + 2]
+      const c3 = coefficients[c + 3]
+      stress = coefficients[c] + t * (coefficients[c + 1] + t * (c2 + t * c3))
+      tangent = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverseWidth
+    } else {
+      evaluateConcrete(law, eps)
+      stress = answer[0]
+      tangent = answer[1]
+    }
+    const force = stress * weight
+    const stiffness = tangent * weight
+    N += force
+    M += force * vs
+    Na += stiffness
+    Nk += stiffness * vs
+    Mk += stiffness * vs * vs
+  }
+  out[axialForce] += N
+  out[moment] += M
+  out[axialTangent] += Na
+  out[couplingTangent] += Nk
+  out[bendingTangent] += Mk
+}
+
+/**
+ * One cell with kinks inside: Gauss on each part between them, over the angle theta of the stations, in which the width
+ * is taken as linear through the cell's two stations.
+ */
+function accumulateSplitCell(
+  model: SectionModel,
+  law: ConcreteLaw,
+  weights: Float64Array,
+  cell: number,
+  eps0: number,
+  kappa: number,
+  out: Float64Array,
+): void {
+  const { weight } = model.stations
+  const start = model.stations.start[cell]
+  const radius = model.stations.length[cell] / 2
+  const thetaFrom = model.stations.thetaFrom[cell]
+  const thetaTo = model.stations.thetaTo[cell]
+  const theta0 = (thetaFrom + thetaTo - gaussPoint * (thetaTo - thetaFrom)) / 2
+  const w0 = weights[2 * cell] / weight[2 * cell]
+  const w1 = weights[2 * cell + 1] / weight[2 * cell + 1]
+  const slope = (w1 - w0) / (gaussPoint * (thetaTo - thetaFrom))
+  const kinkCount = law.kinks.length
+  let from = thetaFrom
+  for (let k = 0; k <= kinkCount; k++) {
+    const to = k < kinkCount ? Math.min(thetaTo, Math.max(from, toTheta(kinkV[k], start, radius))) : thetaTo
+    // Below the first kink there is no stress, nor beyond the last one of concrete that spalls.
+    if (k > 0 && to > from && !(k === kinkCount && kinkCount > 1)) {
+      const half = (to - from) / 2
+      const middle = (to + from) / 2
+      const lower = middle - gaussPoint * half
+      const upper = middle + gaussPoint * half
+      // The two depths make up that of the part, as in stations.ts.
+      const depth = radius * (Math.cos(from) - Math.cos(to))
+      const scale = depth / (Math.sin(lower) + Math.sin(upper))
+      for (let side = 0; side < 2; side++) {
+        const theta = side === 0 ? lower : upper
+        const at = start + radius * (1 - Math.cos(theta))
+        evaluateConcrete(law, eps0 + kappa * at)
+        const area = scale * Math.sin(theta) * (w0 + slope * (theta - theta0))
+        const force = answer[0] * area
+        const stiffness = answer[1] * area
+        out[axialForce] += force
+        out[moment] += force * at
+        out[axialTangent] += stiffness
+        out[couplingTangent] += stiffness * at
+        out[bendingTangent] += stiffness * at * at
+      }
+    }
+    from = to
+  }
+}
+
+/** Angle of a place v in a piece that starts at `start` and is two radii long; 0 or pi outside. */
+function toTheta(v: number, start: number, radius: number): number {
+  return Math.acos(Math.max(-1, Math.min(1, 1 - (v - start) / radius)))
+}
+
+/** Index of the cell that holds v: -1 below the first, the number of cells above the last. */
+function findCell(edges: Float64Array, v: number): number {
+  const cells = edges.length - 1
+  if (v < edges[0]) return -1
+  if (v >= edges[cells]) return cells
+  let low = 0
+  let high = cells
+  while (high - low > 1) {
+    const middle = (low + high) >> 1
+    if (edges[middle] <= v) low = middle
+    else high = middle
+  }
+  return low
+}
+
+function evaluateConcrete(law: ConcreteLaw, eps: number): void {
+  const { top, inverseWidth, coefficients } = law.table
+  if (eps <= 0) {
+    answer[0] = 0
+    answer[1] = 0
+  } else if (eps <= top) {
+    readTable(coefficients, eps * inverseWidth, inverseWidth)
+  } else if (law.kinks.length > 1) {
+    const left = eps - law.kinks[law.kinks.length - 1]
+    answer[0] = left < 0 ? law.lineSlope * left : 0
+    answer[1] = left < 0 ? law.lineSlope : 0
+  } else {
+    answer[0] = law.computeStress(eps)
+    answer[1] = law.computeTangent(eps)
+  }
+}
+
+function evaluateSteel(model: SectionModel, index: number, eps: number): void {
+  const law = model.steels[index]
+  const { table } = law
+  const size = Math.abs(eps)
+  if (table !== null && size <= table.top) {
+    readTable(table.coefficients, size * table.inverseWidth, table.inverseWidth)
+    if (eps < 0) answer[0] = -answer[0]
+  } else {
+    answer[0] = law.computeStress(eps)
+    answer[1] = law.computeTangent(eps)
+  }
+}
+
+function readTable(coefficients: Float64Array, place: number, inverseWidth: number): void {
+  const piece = place | 0
+  const t = place - piece
+  const c = 4 * piece
+  const c2 = coefficients[c + 2]
+  const c3 = coefficients[c + 3]
+  answer[0] = coefficients[c] + t * (coefficients[c + 1] + t * (c2 + t * c3))
+  answer[1] = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverseWidth
+}
