@@ -54,16 +54,22 @@ function computeReach(deltaKappa: number, depth: number): number {
   return Math.max(1e-4, 0.5 * Math.abs(deltaKappa) * depth)
 }
 
-/** The state at kappa on the branch after `from`; null where the branch has none near. */
+/**
+ * The state at kappa on the branch after `from`; null where the branch has none near. Where the state before `from` is
+ * known, the change of the slope between them carries the start of Newton's method along.
+ */
 export function continueFrom(
   solver: EquilibriumSolver,
   load: number,
   depth: number,
   from: BranchState,
   kappa: number,
+  before?: BranchState,
 ): BranchState | null {
   const delta = kappa - from.kappa
-  const eps0 = solver.solve(kappa, from.eps0 + from.strainSlope * delta, computeReach(delta, depth))
+  const bend = before ? (from.strainSlope - before.strainSlope) / (from.kappa - before.kappa) : 0
+  const start = from.eps0 + (from.strainSlope + 0.5 * bend * delta) * delta
+  const eps0 = solver.solve(kappa, start, computeReach(delta, depth))
   return Number.isNaN(eps0) ? null : readState(solver, load, kappa, eps0)
 }
 

@@ -35,7 +35,9 @@ export function layRows(
     const to = states[interval + 1]
     const t = (share - cumulative[interval]) / (cumulative[interval + 1] - cumulative[interval])
     const kappa = from.kappa + t * (to.kappa - from.kappa)
-    const state = solveBetween(context.solver, context.load, context.depth, from, to, kappa)
+    // The row before is nearer than the walked state: a shorter interval starts Newton closer.
+    const near = rows[rows.length - 1].kappa > from.kappa ? rows[rows.length - 1] : from
+    const state = solveBetween(context.solver, context.load, context.depth, near, to, kappa)
     if (state) rows.push(state)
   }
   rows.push(last)

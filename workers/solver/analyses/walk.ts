@@ -35,7 +35,9 @@ const stepsToLimit = 80
 /** Relative to the curvature. */
 const foldTolerance = 2e-7
 /** Relative difference of curvatures that count as one. */
-const tie = 1e-9
+const tie = 1e-7
+/** Relative change of the curvature with which a limit state counts as located. */
+const located = 1e-8
 
 export interface BranchContext {
   solver: EquilibriumSolver
@@ -78,7 +80,7 @@ export function walkBranch(
     if (failedAt < Infinity && failedAt - from.kappa <= foldTolerance * failedAt) {
       return { states, reached, stop: { reason: 'no-equilibrium' } }
     }
-    const to = continueFrom(solver, load, depth, from, kappa)
+    const to = continueFrom(solver, load, depth, from, kappa, states[states.length - 2])
     if (!to) {
       failedAt = kappa
       continue
@@ -150,11 +152,10 @@ export function locateLimit(
     const state = solveBetween(solver, load, depth, from, to, kappa)
     if (!state) break
     const excess = computeExcess(limit, state)
-    if (Math.abs(excess) <= 1e-12) return state
     const slope = sign * (state.strainSlope + limit.v)
     const next = kappa - excess / slope
-    if (!(next >= from.kappa && next <= to.kappa)) break
-    if (Math.abs(next - kappa) <= 1e-13 * kappa) return state
+    if (!(next >= from.kappa * (1 - located) && next <= to.kappa * (1 + located))) break
+    if (Math.abs(next - kappa) <= located * kappa) return state
     kappa = next
   }
   // The strain hardly moves here: close in on it from both sides.
@@ -183,7 +184,7 @@ export function closeIn(
     latest = solveBetween(solver, load, depth, from, to, kappa) ?? latest
     return quantity(latest)
   }
-  const kappa = findRoot(f, from.kappa, to.kappa, 1e-12 * to.kappa, quantity(from), quantity(to))
+  const kappa = findRoot(f, from.kappa, to.kappa, located * to.kappa, quantity(from), quantity(to))
   return solveBetween(solver, load, depth, from, to, kappa) ?? latest
 }
 

@@ -68,13 +68,15 @@ export function findBarExtent(
   model: SectionModel,
   steel?: number,
 ): { lowest: number; highest: number } | null {
-  const { count, v, steel: steels } = model.bars
+  const { v, groups } = model.bars
   let lowest = Infinity
   let highest = -Infinity
-  for (let i = 0; i < count; i++) {
-    if (steel !== undefined && steels[i] !== steel) continue
-    if (v[i] < lowest) lowest = v[i]
-    if (v[i] > highest) highest = v[i]
+  for (const group of groups) {
+    if (steel !== undefined && group.steel !== steel) continue
+    for (let i = group.from; i < group.to; i++) {
+      if (v[i] < lowest) lowest = v[i]
+      if (v[i] > highest) highest = v[i]
+    }
   }
   return lowest === Infinity ? null : { lowest, highest }
 }

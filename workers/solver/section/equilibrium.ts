@@ -23,7 +23,7 @@ export interface EquilibriumSolver {
 }
 
 /** Of f'co Ag: far below the stopping test of the contract (1e-6), so that rows are smooth. */
-const relativeTolerance = 1e-10
+const relativeTolerance = 1e-8
 const mostIterations = 80
 
 export function createEquilibriumSolver(

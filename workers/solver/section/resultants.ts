@@ -10,6 +10,7 @@
 import { gaussPoint } from '../geometry/stations.ts'
 import type { ConcreteLaw } from './concreteLaw.ts'
 import type { SectionModel } from './sectionModel.ts'
+import type { SteelLaw } from './steelLaw.ts'
 
 /** Places in the array of resultants. */
 export const axialForce = 0
@@ -39,39 +40,59 @@ export function computeResultants(model: SectionModel, eps0: number, kappa: numb
   accumulateBars(model, eps0, kappa, out)
 }
 
-/** Moment about the other axis (N·mm): sum(sigma A u). */
+/** Moment about the other axis (N·mm): sum(sigma A u); exactly 0 for a section symmetric about the v axis. */
 export function computeCrossMoment(model: SectionModel, eps0: number, kappa: number): number {
+  if (model.symmetric) return 0
   const sums = new Float64Array(resultantCount)
   for (const fibers of model.concretes) {
     accumulateConcrete(model, fibers.law, fibers.uMoment, fibers.ranges, eps0, kappa, sums)
   }
   let cross = sums[axialForce]
-  const { count, v, u, area, steel, displaced } = model.bars
-  for (let i = 0; i < count; i++) {
-    const eps = eps0 + kappa * v[i]
-    evaluateSteel(model, steel[i], eps)
-    const stress = answer[0]
-    evaluateConcrete(model.concretes[displaced[i]].law, eps)
-    cross += (stress - answer[0]) * area[i] * u[i]
+  const { v, u, area, groups } = model.bars
+  for (const { from, to, steel, displaced } of groups) {
+    for (let i = from; i < to; i++) {
+      const eps = eps0 + kappa * v[i]
+      evaluateSteel(model.steels[steel], eps)
+      const stress = answer[0]
+      evaluateConcrete(model.concretes[displaced].law, eps)
+      cross += (stress - answer[0]) * area[i] * u[i]
+    }
   }
   return cross
 }
 
 function accumulateBars(model: SectionModel, eps0: number, kappa: number, out: Float64Array): void {
-  const { count, v, area, steel, displaced } = model.bars
+  const { groups } = model.bars
+  for (let g = 0; g < groups.length; g++) {
+    const { from, to, steel, displaced } = groups[g]
+    accumulateBarRange(model, from, to, model.steels[steel], model.concretes[displaced].law, eps0, kappa, out)
+  }
+}
+
+function accumulateBarRange(
+  model: SectionModel,
+  from: number,
+  to: number,
+  steel: SteelLaw,
+  concrete: ConcreteLaw,
+  eps0: number,
+  kappa: number,
+  out: Float64Array,
+): void {
+  const { v, area } = model.bars
   let N = 0
   let M = 0
   let Na = 0
   let Nk = 0
   let Mk = 0
-  for (let i = 0; i < count; i++) {
+  for (let i = from; i < to; i++) {
     const vi = v[i]
     const eps = eps0 + kappa * vi
-    evaluateSteel(model, steel[i], eps)
+    evaluateSteel(steel, eps)
     let stress = answer[0]
     let tangent = answer[1]
     if (eps > 0) {
-      evaluateConcrete(model.concretes[displaced[i]].law, eps)
+      evaluateConcrete(concrete, eps)
       stress -= answer[0]
       tangent -= answer[1]
     }
@@ -282,8 +303,7 @@ function evaluateConcrete(law: ConcreteLaw, eps: number): void {
   }
 }
 
-function evaluateSteel(model: SectionModel, index: number, eps: number): void {
-  const law = model.steels[index]
+function evaluateSteel(law: SteelLaw, eps: number): void {
   const { table } = law
   const size = Math.abs(eps)
   if (table !== null && size <= table.top) {

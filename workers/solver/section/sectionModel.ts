@@ -30,10 +30,17 @@ export interface BarFibers {
   v: Float64Array
   u: Float64Array
   area: Float64Array
+  /** Bars [from, to) of one steel in one concrete lie together. */
+  groups: BarRange[]
+}
+
+export interface BarRange {
+  from: number
+  to: number
   /** Index into `steels`. */
-  steel: Int32Array
-  /** Index into `concretes`: the law of the concrete that the bar displaces. */
-  displaced: Int32Array
+  steel: number
+  /** Index into `concretes`: the law of the concrete that the bars displace. */
+  displaced: number
 }
 
 export interface Zone extends ZoneGeometry {
@@ -54,6 +61,8 @@ export interface SectionModel {
   spiralTops: number[]
   /** Voids whose face is free and limits the strain: index in the section and v of the most compressed point. */
   freeFaces: { index: number; top: number }[]
+  /** Every fiber has its mirror image about the v axis: there is no moment about the other axis. */
+  symmetric: boolean
   /** Gross area, voids not deducted, mm2. */
   grossArea: number
   /** Number of area pieces and bars that a resultant sums. */
@@ -61,7 +70,7 @@ export interface SectionModel {
 }
 
 export interface ModelOptions {
-  /** Strips over the depth; pieces between breaks have their own on top. @default 100 */
+  /** Strips over the depth; pieces between breaks have their own on top. @default 70 */
   strips?: number
 }
 
@@ -73,7 +82,7 @@ const tableReach = 1.1
 export function createSectionModel(
   document: AnalysisDocument,
   grossArea: number,
-  { strips = 100 }: ModelOptions = {},
+  { strips = 70 }: ModelOptions = {},
 ): SectionModel {
   const { section, materials, analysis } = document
   const axes = createBendingAxes(section.outline, analysis.angle)
@@ -134,17 +143,18 @@ export function createSectionModel(
 
   const steelNames = Object.keys(materials.steels)
   const placed = placeBars(section.bars)
-  const bars: BarFibers = {
-    count: placed.length,
-    v: Float64Array.from(placed, (bar) => toV(axes, bar.x, bar.y)),
-    u: Float64Array.from(placed, (bar) => toU(axes, bar.x, bar.y)),
-    area: Float64Array.from(placed, (bar) => bar.area),
-    steel: Int32Array.from(placed, (bar) => steelNames.indexOf(bar.steel)),
-    displaced: Int32Array.from(placed, (bar) => {
+  const bars = layBars(
+    placed.map((bar) => {
       const set = section.spirals.flatMap((spiral, index) => (isInside(spiral, bar.x, bar.y) ? [index] : []))
-      return findConcrete(pressureOf(set))
+      return {
+        v: toV(axes, bar.x, bar.y),
+        u: toU(axes, bar.x, bar.y),
+        area: bar.area,
+        steel: steelNames.indexOf(bar.steel),
+        displaced: findConcrete(pressureOf(set)),
+      }
     }),
-  }
+  )
   for (const fibers of concretes) fibers.ranges = findRanges(fibers.area)
 
   return {
@@ -153,7 +163,7 @@ export function createSectionModel(
     zones,
     concretes,
     bars,
-    steels: Object.values(materials.steels).map(createSteelLaw),
+    steels: Object.values(materials.steels).map((steel) => createSteelLaw(steel)),
     steelNames,
     spirals,
     spiralTops: circles.map((circle) => circle.v + circle.radius),
@@ -165,9 +175,30 @@ export function createSectionModel(
         )
       return limits ? [{ index, top: voids[index].v + voids[index].radius }] : []
     }),
+    symmetric: isSymmetric(concretes, bars, axes),
     grossArea,
     fibers:
       placed.length + concretes.reduce((sum, one) => sum + one.area.filter((area) => area !== 0).length, 0),
+  }
+}
+
+/** Bars sorted by steel and displaced concrete, so that the inner loop of the resultants knows one of each. */
+function layBars(
+  placed: { v: number; u: number; area: number; steel: number; displaced: number }[],
+): BarFibers {
+  const sorted = [...placed].sort((a, b) => a.steel - b.steel || a.displaced - b.displaced)
+  const groups: BarRange[] = []
+  sorted.forEach(({ steel, displaced }, i) => {
+    const last = groups.at(-1)
+    if (last && last.steel === steel && last.displaced === displaced) last.to = i + 1
+    else groups.push({ from: i, to: i + 1, steel, displaced })
+  })
+  return {
+    count: sorted.length,
+    v: Float64Array.from(sorted, (bar) => bar.v),
+    u: Float64Array.from(sorted, (bar) => bar.u),
+    area: Float64Array.from(sorted, (bar) => bar.area),
+    groups,
   }
 }
 
@@ -179,6 +210,27 @@ function findBreaks(circles: readonly TurnedCircle[], voids: readonly TurnedCirc
     circle.v + circle.radius,
     ...all.slice(i + 1).flatMap((other) => findCrossings(circle, other)),
   ])
+}
+
+/** Within rounding: first moments of all stations vanish, and bars stand in pairs. */
+function isSymmetric(concretes: readonly ConcreteFibers[], bars: BarFibers, axes: BendingAxes): boolean {
+  const tiny = 1e-9 * (axes.vTop - axes.vBottom)
+  for (const { area, uMoment } of concretes) {
+    for (let s = 0; s < area.length; s++) if (Math.abs(uMoment[s]) > tiny * area[s]) return false
+  }
+  return bars.groups.every(({ from, to }) => {
+    for (let i = from; i < to; i++) {
+      let paired = false
+      for (let j = from; j < to && !paired; j++) {
+        paired =
+          Math.abs(bars.v[i] - bars.v[j]) <= tiny &&
+          Math.abs(bars.u[i] + bars.u[j]) <= tiny &&
+          bars.area[i] === bars.area[j]
+      }
+      if (!paired) return false
+    }
+    return true
+  })
 }
 
 /** Equal but for the order in which sums were taken. */
