@@ -1,0 +1,38 @@
+import { defineStore } from 'pinia'
+import { ref, shallowRef } from 'vue'
+import type { Job, Member, SectionSummary } from '#shared/api.ts'
+import { ApiError, apiClient } from '@/clients/apiClient.ts'
+
+/** One job with its sections and members. */
+export const useJobStore = defineStore('job', () => {
+  const job = shallowRef<Job | null>(null)
+  const sections = shallowRef<SectionSummary[]>([])
+  const members = shallowRef<Member[]>([])
+  const loading = ref<'idle' | 'loading' | 'ready' | 'failed'>('idle')
+  const failure = shallowRef<ApiError | null>(null)
+  let wanted = ''
+
+  async function load(jobId: string) {
+    wanted = jobId
+    loading.value = 'loading'
+    failure.value = null
+    try {
+      const [one, itsSections, itsMembers] = await Promise.all([
+        apiClient.getJob(jobId),
+        apiClient.listSections(jobId),
+        apiClient.listMembers(jobId),
+      ])
+      if (wanted !== jobId) return
+      job.value = one
+      sections.value = itsSections
+      members.value = itsMembers
+      loading.value = 'ready'
+    } catch (error) {
+      if (wanted !== jobId) return
+      failure.value = ApiError.from(error)
+      loading.value = 'failed'
+    }
+  }
+
+  return { job, sections, members, loading, failure, load }
+})
