@@ -1,6 +1,6 @@
 /** Every route against every role: the table is the rule, and no route may be missing from it. */
 import { randomUUID } from 'node:crypto'
-import type { Test } from 'supertest'
+import type { Response, Test } from 'supertest'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { toSeen } from '#shared/document/seenFigures.ts'
 import { roundColumn } from '../helpers/apiDocuments.ts'
@@ -29,7 +29,7 @@ interface Ground {
 }
 let ground: Ground
 
-type Row = [route: string, statuses: Statuses, ask: (visitor: Visitor) => Test | Promise<Test>]
+type Row = [route: string, statuses: Statuses, ask: (visitor: Visitor) => Test | Promise<Response>]
 const everyone = (status: number): Statuses => [status, status, status, status, status, status]
 const accounts = (status: number): Statuses => [401, status, status, status, status, status]
 const administrators = (status: number): Statuses => [401, 403, 403, 403, 403, status]

@@ -1,5 +1,3 @@
-import type { AnalysisDocument } from '#shared/document/analysisDocument.ts'
-
 /** A 1.2 m round column with one spiral, as the page would hand it in: optional fields left out. */
 export function roundColumn(pitch = 80) {
   return {
@@ -33,9 +31,4 @@ export function roundColumn(pitch = 80) {
     },
     analysis: { kind: 'moment-curvature', axialLoad: 6_000_000 },
   }
-}
-
-/** The same as a document, for payload types; the server fills in what is missing. */
-export function roundColumnDocument(pitch = 80): AnalysisDocument {
-  return roundColumn(pitch) as unknown as AnalysisDocument
 }
