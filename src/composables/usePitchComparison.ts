@@ -3,7 +3,7 @@
  * The family belongs to one document; when the section changes it is stale until it is compared again.
  */
 import { computed, onScopeDispose, shallowRef, type ComputedRef, type Ref, type ShallowRef } from 'vue'
-import type { AnalysisDocument, Issue } from '#shared/document/analysisDocument.ts'
+import type { AnalysisDocument } from '#shared/document/analysisDocument.ts'
 import type { MomentCurvatureResult } from '#shared/document/analysisResult.ts'
 import { readDocument } from '#shared/document/readDocument.ts'
 import type { SolverClient } from '@/clients/solverClient.ts'
