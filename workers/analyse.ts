@@ -5,7 +5,7 @@
  * on standard error; 3 no equilibrium even at zero curvature, a result with empty points on standard output.
  */
 import { readFileSync } from 'node:fs'
-import { formatIssue, readDocumentText } from '#shared/document/readDocument.ts'
+import { formatIssue, parseDocumentText } from '#shared/document/readDocument.ts'
 import type { Issue } from '#shared/document/analysisDocument.ts'
 import { solveDocument } from './solver/analyse.ts'
 
@@ -46,7 +46,7 @@ if (argument === undefined || others.length > 0) {
   ])
 }
 
-const read = readDocumentText(readText(argument))
+const read = parseDocumentText(readText(argument))
 if (read.status === 'bad') refuse(read.issues)
 const result = solveDocument(read.document, () => performance.now())
 process.exitCode = result.points.curvature.length > 0 ? 0 : noEquilibrium

@@ -64,6 +64,8 @@ export interface Concrete {
   peakStrain: number
   spallingStrain: number
   modulus: number
+  /** Unloading and reloading; moment-curvature is free of path and does not use it. */
+  cyclic: 'karsan-jirsa' | 'mander'
   tension: { kind: 'none' }
 }
 

@@ -62,7 +62,7 @@ export function fillDefaults(input: AnalysisDocumentInput): AnalysisDocument {
   const cases = (input.cases ?? []).map((one): DesignCase => ({
     name: one.name,
     axialLoad: plain(one.axialLoad),
-    angle: fillAngle(one.angle),
+    angle: toPlainAngle(one.angle ?? 0),
     ...optional('combination', one.combination),
   }))
   const { analysis } = input
@@ -88,7 +88,7 @@ export function fillDefaults(input: AnalysisDocumentInput): AnalysisDocument {
     analysis: {
       kind: analysis.kind,
       axialLoad: plain(named?.axialLoad ?? analysis.axialLoad ?? 0),
-      angle: named?.angle ?? fillAngle(analysis.angle),
+      angle: named?.angle ?? toPlainAngle(analysis.angle ?? 0),
       ...optional('case', analysis.case),
       direction: analysis.direction ?? 'curvature',
       points: analysis.points ?? 200,
@@ -145,7 +145,7 @@ function fillLayout(layout: NonNullable<SectionInput['bars']>[number]['layout'])
         centre: fillPoint(layout.centre),
         diameter: layout.diameter,
         count: layout.count,
-        startAngle: fillAngle(layout.startAngle ?? 90),
+        startAngle: toPlainAngle(layout.startAngle ?? 90),
       }
     case 'line':
       return {
@@ -167,6 +167,7 @@ function fillConcrete(concrete: MaterialsInput['concrete']): Concrete {
     peakStrain: concrete.peakStrain ?? peakStrain,
     spallingStrain: concrete.spallingStrain ?? spallingStrain,
     modulus: concrete.modulus ?? computeDefaultModulus(concrete.strength),
+    cyclic: concrete.cyclic ?? 'karsan-jirsa',
     tension: concrete.tension ?? { kind: 'none' },
   }
 }
@@ -213,7 +214,7 @@ function fillSteel(steel: SteelInput): Steel {
   }
 }
 
-/** NaN where the law lacks what the ratio derives from: `checkMaterials` makes an issue of that. */
+/** NaN where the law lacks what the ratio derives from: the checks make an issue of that. */
 function deriveHardeningRatio(
   steel: Extract<SteelInput, { law: 'menegotto-pinto' }>,
   modulus: number,
@@ -223,10 +224,11 @@ function deriveHardeningRatio(
   return computeHardeningRatio(yieldStrength, tensileStrength, strainAtMaximumStress, modulus)
 }
 
-/** Degrees in [0, 360). */
-function fillAngle(angle = 0): number {
-  const turned = ((angle % 360) + 360) % 360
-  return turned === 360 ? 0 : plain(turned)
+/** The same direction in [0, 360) degrees; an angle that lies there already keeps its digits. */
+export function toPlainAngle(angle: number): number {
+  const turned = angle % 360
+  const positive = turned < 0 ? turned + 360 : turned
+  return positive === 360 ? 0 : plain(positive)
 }
 
 function fillPoint([x, y]: Point): Point {

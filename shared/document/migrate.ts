@@ -3,10 +3,12 @@
  * has its step here and a file in `tests/fixtures/documents`, which is loaded for ever.
  */
 
+import { describeValue } from './issueWords.ts'
+
 export const presentFormat = 'girdwell-analysis/1'
 const formatName = 'girdwell-analysis/'
 
-/** From version n (the key) to n + 1. A step gets a copy that it may change. */
+/** From version n (the key) to n + 1. A step returns a new document and leaves the one it was given as it was. */
 export type MigrationSteps = Readonly<
   Record<number, (document: Record<string, unknown>) => Record<string, unknown>>
 >
@@ -28,16 +30,13 @@ export function migrateDocument(
   present = Number(presentFormat.slice(formatName.length)),
   register = steps,
 ): Migrated {
-  const format = input.format ?? `${formatName}1`
-  const version =
-    typeof format === 'string' && format.startsWith(formatName)
-      ? Number(format.slice(formatName.length))
-      : Number.NaN
-  if (!Number.isInteger(version) || version < 1 || version > present) {
+  const format = input.format === undefined ? `${formatName}1` : input.format
+  const version = findVersion(format)
+  if (version === undefined || version > present) {
     const allowed = present === 1 ? `${formatName}1` : `${formatName}1 to ${formatName}${present}`
-    return { status: 'unknown-format', found: JSON.stringify(format), allowed }
+    return { status: 'unknown-format', found: describeValue(format), allowed }
   }
-  let document = { ...input }
+  let document = input
   for (let from = version; from < present; from++) {
     const step = register[from]
     if (!step)
@@ -45,4 +44,11 @@ export function migrateDocument(
     document = step(document)
   }
   return { status: 'present', document: { ...document, format: `${formatName}${present}` } }
+}
+
+/** The number behind `girdwell-analysis/`, written as a whole number from 1 on; undefined for anything else. */
+function findVersion(format: unknown): number | undefined {
+  if (typeof format !== 'string' || !format.startsWith(formatName)) return undefined
+  const digits = format.slice(formatName.length)
+  return /^[1-9]\d{0,5}$/.test(digits) ? Number(digits) : undefined
 }

@@ -2,7 +2,7 @@
  * The analysis document as people, files and links hand it in: what may stand where.
  *
  * Units: N, mm, MPa, N·mm, 1/mm; angles in degrees. Compression is positive.
- * Optional fields are filled in by `fillDefaults`; rules that need more than one field stand in `checks.ts`.
+ * Optional fields are filled in by `fillDefaults`; rules that need more than one field stand in `checkDocument`.
  */
 import { z } from 'zod'
 
@@ -25,6 +25,9 @@ export const bounds = {
   /** MPa */
   modulus: { min: 100, max: 1_000_000 },
   strain: { min: 1e-5, max: 1 },
+  /** Menegotto-Pinto, slope after yield over modulus */
+  hardeningRatio: { min: 0, max: 0.5 },
+  /** of a group, and of the whole section */
   barCount: 2_000,
   spiralCount: 100,
   polygonPoints: 500,
@@ -40,6 +43,8 @@ const barArea = between(bounds.barArea)
 const strain = between(bounds.strain)
 const angle = z.number().min(-36_000).max(36_000)
 const name = z.string().trim().min(1).max(80)
+/** Keys are not trimmed: two that differ by blanks only would become one. */
+const key = z.string().regex(/^\S(.{0,78}\S)?$/su)
 
 export const outlineSchema = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('circle'), diameter: length }),
@@ -112,6 +117,7 @@ export const concreteSchema = z.strictObject({
   peakStrain: strain.optional(),
   spallingStrain: strain.optional(),
   modulus: between(bounds.modulus).optional(),
+  cyclic: z.enum(['karsan-jirsa', 'mander']).optional(),
   tension: z.strictObject({ kind: z.literal('none') }).optional(),
 })
 
@@ -130,7 +136,7 @@ export const steelSchema = z.discriminatedUnion('law', [
   z.strictObject({
     law: z.literal('menegotto-pinto'),
     ...steelCommon,
-    hardeningRatio: z.number().min(0).max(0.5).optional(),
+    hardeningRatio: between(bounds.hardeningRatio).optional(),
     tensileStrength: steelStrength.optional(),
     strainAtMaximumStress: strain.optional(),
     r0: z.number().min(1).max(200).optional(),
@@ -165,7 +171,7 @@ export const strengthBases = ['expected', 'specified', 'measured', 'design'] as 
 export const materialsSchema = z.strictObject({
   strengthBasis: z.enum(strengthBases).optional(),
   concrete: concreteSchema,
-  steels: z.record(name, steelSchema),
+  steels: z.record(key, steelSchema),
   confinement: confinementSchema.optional(),
 })
 
