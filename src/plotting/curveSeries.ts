@@ -42,7 +42,8 @@ export function computeAxisEnds(series: readonly (readonly PlotPoint[])[]): {
   }
   return {
     xMax: roundUp((x || 0.01) * 1.08),
-    yMin: low < 0 ? -roundUp(-low * 1.05) : 0,
+    // Rounding at zero curvature is no moment below zero.
+    yMin: low < -1e-6 * high ? -roundUp(-low * 1.05) : 0,
     yMax: roundUp((high || 1) * 1.12),
   }
 }
