@@ -48,8 +48,7 @@ export const barSeries: readonly BarSeries[] = [
   {
     id: 'astm-metric',
     title: 'ASTM A615M/A706M, metric',
-    source:
-      'ASTM A615M/A706M as tabled by McCormac & Brown, Design of Reinforced Concrete, Table B.2',
+    source: 'ASTM A615M/A706M as tabled by McCormac & Brown, Design of Reinforced Concrete, Table B.2',
     sizes: toSizes([
       ['10', 9.5, 71],
       ['13', 12.7, 129],

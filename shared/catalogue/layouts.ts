@@ -142,14 +142,14 @@ export const layouts: Layout[] = [
   {
     id: 'one-spiral',
     title: 'One spiral',
-    description: 'Circle of 1.2 m, one spiral, one ring of bars.',
+    description: 'A 1.2 m circle with one spiral and one ring of bars.',
     create: () => ({
       format: 'girdwell-analysis/1',
       section: createOneSpiral(1200, 70),
       materials: createMaterials(40, 35),
       cases: [
         { name: 'permanent load', axialLoad: 5_400_000 },
-        { name: 'greatest load', axialLoad: 9_000_000 },
+        { name: 'greatest load', axialLoad: 6_700_000 },
       ],
       analysis: { kind: 'moment-curvature', case: 'permanent load' },
     }),
@@ -157,7 +157,7 @@ export const layouts: Layout[] = [
   {
     id: 'two-interlocking',
     title: 'Two interlocking spirals',
-    description: 'Oblong of 1.85 by 1.2 m, centres 0.6 diameters apart.',
+    description: 'An oblong of 1.85 by 1.2 m with two spirals whose centres are 0.6 diameters apart.',
     create: () => ({
       format: 'girdwell-analysis/1',
       section: createTwoInterlocking(70),
@@ -172,7 +172,7 @@ export const layouts: Layout[] = [
   {
     id: 'five-spirals',
     title: 'Centre and four corner spirals',
-    description: 'Square of 1.5 m, one large spiral and four small ones.',
+    description: 'A 1.5 m square with a large spiral in the middle and a small one in each corner.',
     create: () => ({
       format: 'girdwell-analysis/1',
       section: createFiveSpirals(80),

@@ -19,9 +19,17 @@ export interface SteelGrade {
 
 /** Exponent of the hardening curve; Priestley, Calvi & Kowalsky 2007 (from memory). */
 const hardeningExponent = 2
-/** ksi to MPa, for strengths that their standard states in ksi; to 0.01 MPa. */
-const gr60 = { yield: 468.84, tensile: 655, specified: { yieldStrength: 420, tensileStrength: 550 } }
-const gr80 = { yield: 586.05, tensile: 772.21, specified: { yieldStrength: 550, tensileStrength: 690 } }
+/** Expected strengths 68 and 95 ksi, 85 and 112 ksi, to 0.01 MPa. */
+const expected = {
+  grade60: { yieldStrength: 468.84, tensileStrength: 655 },
+  grade80: { yieldStrength: 586.05, tensileStrength: 772.21 },
+}
+/** Least values of the standards; A615 has had two tensile strengths for Grade 60 and is left without. */
+const specified = {
+  a706Grade60: { yieldStrength: 420, tensileStrength: 550 },
+  a615Grade60: { yieldStrength: 420 },
+  a706Grade80: { yieldStrength: 550, tensileStrength: 690 },
+}
 
 const guide =
   'AASHTO Guide Specifications for LRFD Seismic Bridge Design, Table 8.4.2-1, and California Seismic Design Criteria 3.2.3 (from memory)'
@@ -32,14 +40,26 @@ export const steelGrades: readonly SteelGrade[] = [
     title: 'A706 Grade 60, expected',
     basis: 'expected',
     source: guide,
-    create: (barDiameter) => createGrade60(barDiameter, { small: 0.12, large: 0.09 }, { small: 0.09, large: 0.06 }),
+    create: (barDiameter) =>
+      createPlateau(
+        expected.grade60,
+        specified.a706Grade60,
+        findHardeningStrain(barDiameter),
+        isLarge(barDiameter) ? { atMaximum: 0.09, limit: 0.06 } : { atMaximum: 0.12, limit: 0.09 },
+      ),
   },
   {
     id: 'a615-60-expected',
     title: 'A615 Grade 60, expected',
     basis: 'expected',
     source: guide,
-    create: (barDiameter) => createGrade60(barDiameter, { small: 0.09, large: 0.06 }, { small: 0.06, large: 0.04 }),
+    create: (barDiameter) =>
+      createPlateau(
+        expected.grade60,
+        specified.a615Grade60,
+        findHardeningStrain(barDiameter),
+        isLarge(barDiameter) ? { atMaximum: 0.06, limit: 0.04 } : { atMaximum: 0.09, limit: 0.06 },
+      ),
   },
   {
     id: 'a706-80-expected',
@@ -47,7 +67,8 @@ export const steelGrades: readonly SteelGrade[] = [
     basis: 'expected',
     source:
       'Overby, Kowalsky & Seracino 2017, Constr. Build. Mater. 145, 292-302 (figures from memory, to be confirmed)',
-    create: () => createPlateau(gr80, 0.0074, 0.0954, 0.06),
+    create: () =>
+      createPlateau(expected.grade80, specified.a706Grade80, 0.0074, { atMaximum: 0.0954, limit: 0.06 }),
   },
   createEurocode('b500b', 'B500B', 1.08, 0.05, 'specified'),
   createEurocode('b500b', 'B500B', 1.08, 0.05, 'expected'),
@@ -56,13 +77,8 @@ export const steelGrades: readonly SteelGrade[] = [
 ]
 
 /** Strains of Grade 60 part between #10 (32.3 mm) and #11 (35.8 mm). */
-function createGrade60(
-  barDiameter: number,
-  atMaximum: { small: number; large: number },
-  limit: { small: number; large: number },
-): SteelInput {
-  const size = barDiameter < 34 ? 'small' : 'large'
-  return createPlateau(gr60, findHardeningStrain(barDiameter), atMaximum[size], limit[size])
+function isLarge(barDiameter: number): boolean {
+  return barDiameter >= 34
 }
 
 /** Onset of strain hardening by size: to #8, #9, #10 and #11, #14, #18. */
@@ -74,21 +90,20 @@ function findHardeningStrain(barDiameter: number): number {
 }
 
 function createPlateau(
-  strength: typeof gr60,
+  strength: { yieldStrength: number; tensileStrength: number },
+  specified: NonNullable<SteelInput['specified']>,
   hardeningStrain: number,
-  strainAtMaximumStress: number,
-  limitStrain: number,
+  strain: { atMaximum: number; limit: number },
 ): SteelInput {
-  const rise = strength.tensile - strength.yield
+  const rise = strength.tensileStrength - strength.yieldStrength
   return {
     law: 'plateau-hardening',
-    yieldStrength: strength.yield,
-    tensileStrength: strength.tensile,
+    ...strength,
     hardeningStrain,
-    hardeningModulus: roundDerived((hardeningExponent * rise) / (strainAtMaximumStress - hardeningStrain)),
-    strainAtMaximumStress,
-    limitStrain,
-    specified: { ...strength.specified },
+    hardeningModulus: roundDerived((hardeningExponent * rise) / (strain.atMaximum - hardeningStrain)),
+    strainAtMaximumStress: strain.atMaximum,
+    limitStrain: strain.limit,
+    specified: { ...specified },
   }
 }
 
