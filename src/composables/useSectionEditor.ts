@@ -31,6 +31,8 @@ export interface SectionEditor {
   edit(document: AnalysisDocument, commit?: 'now' | 'later'): void
   editSection(section: Section, commit?: 'now' | 'later'): void
   rename(title: string): void
+  /** Revision that the work started from: a write that names an older one than the stored is a conflict. */
+  baseRevision: Readonly<ShallowRef<number>>
   /** Unsaved work of an earlier visit that was taken up again, until it is saved or dropped. */
   restored: Readonly<ShallowRef<Draft | null>>
   /** Drops unsaved work and starts from the stored section. */
@@ -58,6 +60,7 @@ export function useSectionEditor({
   const base = shallowRef(stored)
   const draft = editable ? drafts.find(stored.id) : undefined
   const restored = shallowRef<Draft | null>(draft ?? null)
+  const baseRevision = shallowRef(draft?.baseRevision ?? stored.revision)
   const draftKept = shallowRef(true)
   const history = useHistory<Work>({ title: stored.title, document: stored.document })
   if (draft) history.apply({ title: draft.title, document: draft.document }, 'now')
@@ -78,7 +81,7 @@ export function useSectionEditor({
     draftKept.value = drafts.keep(base.value.id, {
       title,
       document,
-      baseRevision: base.value.revision,
+      baseRevision: baseRevision.value,
       changedAt: now(),
     })
   }
@@ -102,16 +105,19 @@ export function useSectionEditor({
     edit,
     editSection: (section, commit = 'now') => edit({ ...history.current.value.document, section }, commit),
     rename: (title) => history.apply({ ...history.current.value, title }, 'now'),
+    baseRevision,
     restored,
     draftKept,
     startFrom(next) {
       base.value = next
+      baseRevision.value = next.revision
       restored.value = null
       history.reset({ title: next.title, document: next.document })
       drafts.remove(next.id)
     },
     wasSaved(next) {
       base.value = next
+      baseRevision.value = next.revision
       restored.value = null
       keepDraft()
     },

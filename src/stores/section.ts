@@ -33,14 +33,14 @@ export const useSectionStore = defineStore('section', () => {
     }
   }
 
-  /** Writes over the revision that was read. Tells the stored section, or null where it was not stored. */
-  async function save(write: SectionWrite): Promise<StoredSection | null> {
+  /** Writes over the revision that the work started from. Tells the stored section, or null where it was not stored. */
+  async function save(write: SectionWrite, baseRevision: number): Promise<StoredSection | null> {
     const base = stored.value
     if (!base || saving.value === 'saving') return null
     saving.value = 'saving'
     saveFailure.value = null
     try {
-      const section = await apiClient.putSection(base.id, base.revision, write)
+      const section = await apiClient.putSection(base.id, baseRevision, write)
       stored.value = section
       saving.value = 'idle'
       return section
