@@ -49,8 +49,8 @@ export function place(x: number, y: number): string {
   return `(${shorten(x)}, ${shorten(y)})`
 }
 
-/** One decimal; two significant digits where that leaves nothing. */
+/** One decimal; two significant digits where that leaves nothing; what rounding of sines leaves is nothing. */
 function shorten(value: number): number {
-  const short = Math.abs(value) < 0.05 ? Number(value.toPrecision(2)) : Math.round(value * 10) / 10
-  return short === 0 ? 0 : short
+  if (Math.abs(value) < 1e-6) return 0
+  return Math.abs(value) < 0.05 ? Number(value.toPrecision(2)) : Math.round(value * 10) / 10
 }

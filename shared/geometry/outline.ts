@@ -205,12 +205,19 @@ export function computeClearance(outline: Outline, point: Point): number {
   }
 }
 
-/** The first two sides of a closed polygon that cross or touch though they are not neighbours; null: it is simple. */
+/**
+ * The first two sides of a closed polygon that cross or touch though they are not neighbours; one side twice where it has
+ * no length; null: the polygon is simple.
+ */
 export function findCrossingSides(points: readonly Point[]): [number, number] | null {
   const n = points.length
+  const twice = points.findIndex(([x, y], i) => {
+    const next = points[(i + 1) % n]
+    return x === next[0] && y === next[1]
+  })
+  if (twice >= 0) return [twice, twice]
   for (let i = 0; i < n; i++) {
     const next = points[(i + 1) % n]
-    if (points[i][0] === next[0] && points[i][1] === next[1]) return [i, i]
     for (let j = i + 1; j < n; j++) {
       const neighbours = j === i + 1 || (i === 0 && j === n - 1)
       if (neighbours) {

@@ -1,0 +1,32 @@
+/** Documents of tests/fixtures/documents, each time anew, so that a test may change what it gets. */
+import { readFileSync } from 'node:fs'
+import type { AnalysisDocument } from '#shared/document/analysisDocument.ts'
+import { readDocument } from '#shared/document/readDocument.ts'
+import type { AnalysisDocumentInput } from '#shared/document/schema.ts'
+
+const folder = new URL('../fixtures/documents/', import.meta.url)
+
+export const fixtureNames = ['format-1', 'one-spiral', 'octagon-hoop'] as const
+export type FixtureName = (typeof fixtureNames)[number]
+
+export function loadFixture(file: string): unknown {
+  return JSON.parse(readFileSync(new URL(`${file}.json`, folder), 'utf8'))
+}
+
+/** Path of a fixture, for programs that read files. */
+export function toFixturePath(file: string): string {
+  return new URL(`${file}.json`, folder).pathname
+}
+
+/** As handed in: sound, with defaults left out. */
+export function loadInput(name: FixtureName = 'one-spiral'): AnalysisDocumentInput {
+  return loadFixture(name) as AnalysisDocumentInput
+}
+
+/** The document that anything sound reads to. */
+export function readSound(input: unknown): AnalysisDocument {
+  const read = readDocument(input)
+  if (read.status === 'bad')
+    throw new Error(`A sound document has no issues; found ${JSON.stringify(read.issues)}`)
+  return read.document
+}
