@@ -18,7 +18,12 @@ import { computeOutlineArea } from '#shared/geometry/outline.ts'
 import { listWarnings } from '../detailing/warnings.ts'
 import { createEquilibriumSolver, findStart, type StartRange } from '../section/equilibrium.ts'
 import { computeCrossMoment } from '../section/resultants.ts'
-import { createSectionModel, type ModelOptions, type SectionModel } from '../section/sectionModel.ts'
+import {
+  createSectionModel,
+  defaultStrips,
+  type ModelOptions,
+  type SectionModel,
+} from '../section/sectionModel.ts'
 import { readState, type BranchState } from './branch.ts'
 import { idealiseCurve } from './idealise.ts'
 import { insertRows, layRows } from './rows.ts'
@@ -35,10 +40,39 @@ export type MomentCurvatureSolution = Pick<
 /** Tensile strain to which a section is followed at zero curvature where its bars have no limit strain. */
 const leastStrainWithoutLimit = -0.1
 
+/** A fold of the branch is believed when refining the strips by this factor moves it by less than `foldMoves`. */
+const refinement = 4
+const mostRefinements = 3
+/** Relative to the curvature. */
+const foldMoves = 1e-3
+
+/**
+ * The curve of a filled, sound document. Where it ends by a fold of the branch, the strips are refined until the fold stays:
+ * coarse integration of a strongly softening section makes folds that are not there.
+ */
 export function solveMomentCurvature(
   document: AnalysisDocument,
   options: ModelOptions = {},
 ): MomentCurvatureSolution {
+  let solution = solveOnStrips(document, options)
+  let strips = options.strips ?? defaultStrips
+  for (let i = 0; i < mostRefinements && isFold(solution); i++) {
+    strips *= refinement
+    const finer = solveOnStrips(document, { ...options, strips })
+    const before = solution.points.curvature.at(-1) ?? 0
+    const after = finer.points.curvature.at(-1) ?? 0
+    const stays = isFold(finer) && Math.abs(after - before) <= foldMoves * after
+    solution = finer
+    if (stays) break
+  }
+  return solution
+}
+
+function isFold({ stop, points }: MomentCurvatureSolution): boolean {
+  return stop.reason === 'no-equilibrium' && points.curvature.length > 0
+}
+
+function solveOnStrips(document: AnalysisDocument, options: ModelOptions): MomentCurvatureSolution {
   const { analysis, materials } = document
   const load = analysis.axialLoad
   const model = createSectionModel(document, computeOutlineArea(document.section.outline), options)

@@ -69,6 +69,9 @@ export interface SectionModel {
   fibers: number
 }
 
+/** Strips over the depth of a section where nothing else is asked for. */
+export const defaultStrips = 70
+
 export interface ModelOptions {
   /** Strips over the depth; pieces between breaks have their own on top. @default 70 */
   strips?: number
@@ -82,7 +85,7 @@ const tableReach = 1.1
 export function createSectionModel(
   document: AnalysisDocument,
   grossArea: number,
-  { strips = 70 }: ModelOptions = {},
+  { strips = defaultStrips }: ModelOptions = {},
 ): SectionModel {
   const { section, materials, analysis } = document
   const axes = createBendingAxes(section.outline, analysis.angle)
