@@ -4,6 +4,7 @@ import { idealiseCurve } from '#workers/solver/analyses/idealise.ts'
 import {
   computeConfiningStress,
   computeEffectiveness,
+  computeMassPerLength,
   computeUltimateStrain,
   computeVolumetricRatio,
 } from '#workers/solver/materials/confinement.ts'
@@ -84,6 +85,17 @@ describe('confined concrete', () => {
       ['fcc', lens, 56.43781],
       ['epsCc', computeConfinedPeakStrain(0.002, 35, lens), 0.008125088],
     ])
+  })
+
+  it('weighs one turn of spiral over its pitch', () => {
+    expectAll(
+      'helix of diameter 1084 and pitch 80, 7850 kg/m3 (EN 1991-1-1, from memory), by hand',
+      'bar 201.0619 mm2',
+      [
+        ['spiral', computeMassPerLength('spiral', 201.0619, ds, 80), 0.0672060556],
+        ['hoop', computeMassPerLength('hoop', 201.0619, ds, 80), 0.0671875194],
+      ],
+    )
   })
 
   it('has the unconfined curve with its straight line', () => {
