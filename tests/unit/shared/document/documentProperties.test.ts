@@ -47,7 +47,7 @@ function expectSoundIssues(outcome: ReturnType<typeof readDocument>): void {
   }
 }
 
-describe('documents in general', () => {
+describe('documents in general', { timeout: 30_000 }, () => {
   it('a filled document reads to itself, with the same digest, also through JSON text', () => {
     fc.assert(
       fc.property(documentArbitrary, (input) => {
