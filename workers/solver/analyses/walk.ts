@@ -31,7 +31,7 @@ export const dropShare = 0.8
 
 const firstStepByYield = 0.2
 const stepGrowth = 1.1
-const stepsToLimit = 80
+const stepsToLimit = 110
 /** Relative to the curvature. */
 const foldTolerance = 2e-7
 /** Relative difference of curvatures that count as one. */

@@ -18,6 +18,8 @@ export interface Stations {
   length: Float64Array
   thetaFrom: Float64Array
   thetaTo: Float64Array
+  /** 1 for the first and last cells of a piece, where a circle may have its pole. */
+  atEnd: Uint8Array
 }
 
 /** Distance of the two Gauss-Legendre points from the middle of a cell, as a share of its half. */
@@ -54,6 +56,7 @@ export function createStations(
     length: new Float64Array(cells),
     thetaFrom: new Float64Array(cells),
     thetaTo: new Float64Array(cells),
+    atEnd: new Uint8Array(cells),
   }
   let cell = 0
   cellsOf.forEach((count, piece) => {
@@ -65,6 +68,7 @@ export function createStations(
       stations.length[cell] = length
       stations.thetaFrom[cell] = 2 * half * k
       stations.thetaTo[cell] = 2 * half * (k + 1)
+      stations.atEnd[cell] = k === 0 || k === count - 1 ? 1 : 0
       stations.edges[cell] = k === 0 ? start : toPlace(start, length, 2 * half * k)
       const lower = half * (2 * k + 1 - gaussPoint)
       const upper = half * (2 * k + 1 + gaussPoint)

@@ -69,6 +69,7 @@ function accumulateBars(model: SectionModel, eps0: number, kappa: number, out: F
   }
 }
 
+/** Bars [from, to) of one steel in one concrete. Both tables are read in place: this is half of the work. */
 function accumulateBarRange(
   model: SectionModel,
   from: number,
@@ -80,6 +81,11 @@ function accumulateBarRange(
   out: Float64Array,
 ): void {
   const { v, area } = model.bars
+  const steelTable = steel.table
+  const steelTop = steelTable === null ? -1 : steelTable.top
+  const steelInverse = steelTable === null ? 0 : steelTable.inverseWidth
+  const s = steelTable === null ? concrete.table.coefficients : steelTable.coefficients
+  const { top, inverseWidth, coefficients: c } = concrete.table
   let N = 0
   let M = 0
   let Na = 0
@@ -88,13 +94,34 @@ function accumulateBarRange(
   for (let i = from; i < to; i++) {
     const vi = v[i]
     const eps = eps0 + kappa * vi
-    evaluateSteel(steel, eps)
-    let stress = answer[0]
-    let tangent = answer[1]
+    const size = eps < 0 ? -eps : eps
+    let stress: number
+    let tangent: number
+    if (size <= steelTop) {
+      const place = size * steelInverse
+      const piece = place | 0
+      const t = place - piece
+      const k = 4 * piece
+      stress = s[k] + t * (s[k + 1] + t * (s[k + 2] + t * s[k + 3]))
+      tangent = (s[k + 1] + t * (2 * s[k + 2] + 3 * s[k + 3] * t)) * steelInverse
+      if (eps < 0) stress = -stress
+    } else {
+      stress = steel.computeStress(eps)
+      tangent = steel.computeTangent(eps)
+    }
     if (eps > 0) {
-      evaluateConcrete(concrete, eps)
-      stress -= answer[0]
-      tangent -= answer[1]
+      if (eps <= top) {
+        const place = eps * inverseWidth
+        const piece = place | 0
+        const t = place - piece
+        const k = 4 * piece
+        stress -= c[k] + t * (c[k + 1] + t * (c[k + 2] + t * c[k + 3]))
+        tangent -= (c[k + 1] + t * (2 * c[k + 2] + 3 * c[k + 3] * t)) * inverseWidth
+      } else {
+        evaluateConcrete(concrete, eps)
+        stress -= answer[0]
+        tangent -= answer[1]
+      }
     }
     const force = stress * area[i]
     const stiffness = tangent * area[i]
@@ -214,8 +241,8 @@ function accumulateCells(
 }
 
 /**
- * One cell with kinks inside: Gauss on each part between them, over the angle theta of the stations, in which the width
- * is taken as linear through the cell's two stations.
+ * One cell with kinks inside: Gauss on each part between them. At a pole the width grows like a square root, so there the
+ * parts are taken over the angle theta of the stations, in which it is linear; elsewhere over v.
  */
 function accumulateSplitCell(
   model: SectionModel,
@@ -226,44 +253,65 @@ function accumulateSplitCell(
   kappa: number,
   out: Float64Array,
 ): void {
-  const { weight } = model.stations
-  const start = model.stations.start[cell]
-  const radius = model.stations.length[cell] / 2
-  const thetaFrom = model.stations.thetaFrom[cell]
-  const thetaTo = model.stations.thetaTo[cell]
-  const theta0 = (thetaFrom + thetaTo - gaussPoint * (thetaTo - thetaFrom)) / 2
-  const w0 = weights[2 * cell] / weight[2 * cell]
-  const w1 = weights[2 * cell + 1] / weight[2 * cell + 1]
-  const slope = (w1 - w0) / (gaussPoint * (thetaTo - thetaFrom))
+  const { stations } = model
+  const w0 = weights[2 * cell] / stations.weight[2 * cell]
+  const w1 = weights[2 * cell + 1] / stations.weight[2 * cell + 1]
+  if (w0 === 0 && w1 === 0) return
+  const atEnd = stations.atEnd[cell] === 1
+  const start = stations.start[cell]
+  const radius = stations.length[cell] / 2
+  /** Ends of the cell and place of the first station, in theta or v. */
+  const lower = atEnd ? stations.thetaFrom[cell] : stations.edges[cell]
+  const upper = atEnd ? stations.thetaTo[cell] : stations.edges[cell + 1]
+  const first = atEnd ? (lower + upper - gaussPoint * (upper - lower)) / 2 : stations.v[2 * cell]
+  const second = atEnd ? (lower + upper + gaussPoint * (upper - lower)) / 2 : stations.v[2 * cell + 1]
+  const slope = (w1 - w0) / (second - first)
   const kinkCount = law.kinks.length
-  let from = thetaFrom
+  let N = 0
+  let M = 0
+  let Na = 0
+  let Nk = 0
+  let Mk = 0
+  let from = lower
   for (let k = 0; k <= kinkCount; k++) {
-    const to = k < kinkCount ? Math.min(thetaTo, Math.max(from, toTheta(kinkV[k], start, radius))) : thetaTo
+    let to = upper
+    if (k < kinkCount) {
+      const kink = atEnd ? toTheta(kinkV[k], start, radius) : kinkV[k]
+      to = kink < from ? from : kink > upper ? upper : kink
+    }
     // Below the first kink there is no stress, nor beyond the last one of concrete that spalls.
     if (k > 0 && to > from && !(k === kinkCount && kinkCount > 1)) {
       const half = (to - from) / 2
       const middle = (to + from) / 2
-      const lower = middle - gaussPoint * half
-      const upper = middle + gaussPoint * half
-      // The two depths make up that of the part, as in stations.ts.
-      const depth = radius * (Math.cos(from) - Math.cos(to))
-      const scale = depth / (Math.sin(lower) + Math.sin(upper))
       for (let side = 0; side < 2; side++) {
-        const theta = side === 0 ? lower : upper
-        const at = start + radius * (1 - Math.cos(theta))
+        const place = middle + (side === 0 ? -gaussPoint : gaussPoint) * half
+        let at = place
+        let depth = half
+        if (atEnd) {
+          at = start + radius * (1 - Math.cos(place))
+          // The two depths make up that of the part, as in stations.ts.
+          const mirrored = 2 * middle - place
+          const sine = Math.sin(place)
+          depth = (radius * (Math.cos(from) - Math.cos(to)) * sine) / (sine + Math.sin(mirrored))
+        }
         evaluateConcrete(law, eps0 + kappa * at)
-        const area = scale * Math.sin(theta) * (w0 + slope * (theta - theta0))
+        const area = depth * (w0 + slope * (place - first))
         const force = answer[0] * area
         const stiffness = answer[1] * area
-        out[axialForce] += force
-        out[moment] += force * at
-        out[axialTangent] += stiffness
-        out[couplingTangent] += stiffness * at
-        out[bendingTangent] += stiffness * at * at
+        N += force
+        M += force * at
+        Na += stiffness
+        Nk += stiffness * at
+        Mk += stiffness * at * at
       }
     }
     from = to
   }
+  out[axialForce] += N
+  out[moment] += M
+  out[axialTangent] += Na
+  out[couplingTangent] += Nk
+  out[bendingTangent] += Mk
 }
 
 /** Angle of a place v in a piece that starts at `start` and is two radii long; 0 or pi outside. */
