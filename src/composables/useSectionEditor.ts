@@ -66,9 +66,12 @@ export function useSectionEditor({
   if (draft) history.apply({ title: draft.title, document: draft.document }, 'now')
 
   const read = computed(() => readDocument(history.current.value.document))
+  const written = computed(() => write(base.value.document))
   const dirty = computed(() => {
     const { title, document } = history.current.value
-    return title !== base.value.title || !isSame(document, base.value.document)
+    return (
+      title !== base.value.title || (document !== base.value.document && write(document) !== written.value)
+    )
   })
 
   function keepDraft() {
@@ -124,11 +127,11 @@ export function useSectionEditor({
   }
 }
 
-function isSame(a: AnalysisDocument, b: AnalysisDocument): boolean {
-  return a === b || JSON.stringify(sortKeys(a)) === JSON.stringify(sortKeys(b))
+/** Equal for documents that differ in the order of fields only. */
+function write(document: AnalysisDocument): string {
+  return JSON.stringify(sortKeys(document))
 }
 
-/** Documents that differ in the order of fields only are the same. */
 function sortKeys(value: unknown): unknown {
   if (Array.isArray(value)) return value.map(sortKeys)
   if (typeof value !== 'object' || value === null) return value
