@@ -3,6 +3,7 @@
  * UUIDs made by the client, so that a retry is safe. Whatever two people can edit carries a `revision`;
  * a write names the one it read in `If-Match`.
  */
+import './noCodeFromText.ts'
 import { z } from 'zod'
 import type { AnalysisDocument, Issue } from './document/analysisDocument.ts'
 import type { MomentCurvatureResult } from './document/analysisResult.ts'

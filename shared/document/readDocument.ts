@@ -1,5 +1,4 @@
 /** From anything to a filled, sound analysis document, or to the list of what is wrong with it. */
-import { z } from 'zod'
 import type { AnalysisDocument, Issue } from './analysisDocument.ts'
 import { checkDocument } from './checkDocument.ts'
 import { fillDefaults } from './fillDefaults.ts'
@@ -7,9 +6,6 @@ import { describeValue } from './issueWords.ts'
 import { migrateDocument } from './migrate.ts'
 import { documentSchema } from './schema.ts'
 import { toIssues } from './schemaIssues.ts'
-
-// No code is made from strings, so that the page's content security policy holds.
-z.config({ jitless: true })
 
 export type ReadOutcome = { status: 'read'; document: AnalysisDocument } | { status: 'bad'; issues: Issue[] }
 

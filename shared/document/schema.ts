@@ -4,6 +4,7 @@
  * Units: N, mm, MPa, N·mm, 1/mm; angles in degrees. Compression is positive.
  * Optional fields are filled in by `fillDefaults`; rules that need more than one field stand in `checkDocument`.
  */
+import '../noCodeFromText.ts'
 import { z } from 'zod'
 
 /** Bounds that only catch slips of unit or of the decimal point; engineering limits are warnings of the solver. */
