@@ -28,7 +28,7 @@ export interface ConcreteLaw {
   computeTangent(eps: number): number
 }
 
-/** Pieces per strain at peak: relative error of the table about (1/60)^4, below 1e-7. */
+/** Pieces per strain at peak: the table, with its head, misses the law by less than 3e-7 of the strength. */
 const piecesPerPeak = 60
 const mostPieces = 600
 
@@ -48,7 +48,7 @@ export function createConcreteLaw(
       strength: fco,
       peakStrain: epsCo,
       kinks: [0, law.epsLine, epsSp],
-      table: createHermiteTable(computeStress, computeTangent, law.epsLine, 2 * piecesPerPeak),
+      table: createHermiteTable(computeStress, computeTangent, law.epsLine, 2 * piecesPerPeak, true),
       lineSlope: law.slopeLine,
       computeStress,
       computeTangent,
@@ -65,7 +65,7 @@ export function createConcreteLaw(
     strength,
     peakStrain,
     kinks: [0],
-    table: createHermiteTable(computeStress, computeTangent, tableTop, Math.max(60, pieces)),
+    table: createHermiteTable(computeStress, computeTangent, tableTop, Math.max(60, pieces), true),
     lineSlope: 0,
     computeStress,
     computeTangent,

@@ -8,6 +8,7 @@
  * jumps and shows folds that are not there. Bars act at their centres; the concrete they displace is deducted.
  */
 import { gaussPoint } from '../geometry/stations.ts'
+import type { HermiteTable } from '../numeric/hermiteTable.ts'
 import type { ConcreteLaw } from './concreteLaw.ts'
 import type { SectionModel } from './sectionModel.ts'
 import type { SteelLaw } from './steelLaw.ts'
@@ -85,7 +86,7 @@ function accumulateBarRange(
   const steelTop = steelTable === null ? -1 : steelTable.top
   const steelInverse = steelTable === null ? 0 : steelTable.inverseWidth
   const s = steelTable === null ? concrete.table.coefficients : steelTable.coefficients
-  const { top, inverseWidth, coefficients: c } = concrete.table
+  const { top, inverseWidth, coefficients: c, headTop, headInverseWidth, headStart } = concrete.table
   let N = 0
   let M = 0
   let Na = 0
@@ -111,12 +112,13 @@ function accumulateBarRange(
     }
     if (eps > 0) {
       if (eps <= top) {
-        const place = eps * inverseWidth
+        const inverse = eps < headTop ? headInverseWidth : inverseWidth
+        const place = eps * inverse
         const piece = place | 0
         const t = place - piece
-        const k = 4 * piece
+        const k = 4 * piece + (eps < headTop ? headStart : 0)
         stress -= c[k] + t * (c[k + 1] + t * (c[k + 2] + t * c[k + 3]))
-        tangent -= (c[k + 1] + t * (2 * c[k + 2] + 3 * c[k + 3] * t)) * inverseWidth
+        tangent -= (c[k + 1] + t * (2 * c[k + 2] + 3 * c[k + 3] * t)) * inverse
       } else {
         evaluateConcrete(concrete, eps)
         stress -= answer[0]
@@ -198,7 +200,7 @@ function accumulateCells(
   out: Float64Array,
 ): void {
   const { v } = model.stations
-  const { top, inverseWidth, coefficients } = law.table
+  const { top, inverseWidth, coefficients, headTop, headInverseWidth, headStart } = law.table
   let N = 0
   let M = 0
   let Na = 0
@@ -212,14 +214,15 @@ function accumulateCells(
     let stress: number
     let tangent: number
     if (eps <= top) {
-      const place = eps * inverseWidth
+      const inverse = eps < headTop ? headInverseWidth : inverseWidth
+      const place = eps * inverse
       const piece = place | 0
       const t = place - piece
-      const c = 4 * piece
+      const c = 4 * piece + (eps < headTop ? headStart : 0)
       const c2 = coefficients[c + 2]
       const c3 = coefficients[c + 3]
       stress = coefficients[c] + t * (coefficients[c + 1] + t * (c2 + t * c3))
-      tangent = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverseWidth
+      tangent = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverse
     } else {
       evaluateConcrete(law, eps)
       stress = answer[0]
@@ -335,12 +338,11 @@ function findCell(edges: Float64Array, v: number): number {
 }
 
 function evaluateConcrete(law: ConcreteLaw, eps: number): void {
-  const { top, inverseWidth, coefficients } = law.table
   if (eps <= 0) {
     answer[0] = 0
     answer[1] = 0
-  } else if (eps <= top) {
-    readTable(coefficients, eps * inverseWidth, inverseWidth)
+  } else if (eps <= law.table.top) {
+    readTable(law.table, eps)
   } else if (law.kinks.length > 1) {
     const left = eps - law.kinks[law.kinks.length - 1]
     answer[0] = left < 0 ? law.lineSlope * left : 0
@@ -355,7 +357,7 @@ function evaluateSteel(law: SteelLaw, eps: number): void {
   const { table } = law
   const size = Math.abs(eps)
   if (table !== null && size <= table.top) {
-    readTable(table.coefficients, size * table.inverseWidth, table.inverseWidth)
+    readTable(table, size)
     if (eps < 0) answer[0] = -answer[0]
   } else {
     answer[0] = law.computeStress(eps)
@@ -363,12 +365,15 @@ function evaluateSteel(law: SteelLaw, eps: number): void {
   }
 }
 
-function readTable(coefficients: Float64Array, place: number, inverseWidth: number): void {
+function readTable(table: HermiteTable, x: number): void {
+  const { coefficients, headTop } = table
+  const inverse = x < headTop ? table.headInverseWidth : table.inverseWidth
+  const place = x * inverse
   const piece = place | 0
   const t = place - piece
-  const c = 4 * piece
+  const c = 4 * piece + (x < headTop ? table.headStart : 0)
   const c2 = coefficients[c + 2]
   const c3 = coefficients[c + 3]
   answer[0] = coefficients[c] + t * (coefficients[c + 1] + t * (c2 + t * c3))
-  answer[1] = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverseWidth
+  answer[1] = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverse
 }
