@@ -20,6 +20,8 @@ export interface Stations {
   thetaTo: Float64Array
   /** 1 for the first and last cells of a piece, where a circle may have its pole. */
   atEnd: Uint8Array
+  /** Depth of the deepest cell, mm. */
+  widest: number
 }
 
 /** Distance of the two Gauss-Legendre points from the middle of a cell, as a share of its half. */
@@ -57,6 +59,7 @@ export function createStations(
     thetaFrom: new Float64Array(cells),
     thetaTo: new Float64Array(cells),
     atEnd: new Uint8Array(cells),
+    widest: 0,
   }
   let cell = 0
   cellsOf.forEach((count, piece) => {
@@ -77,6 +80,7 @@ export function createStations(
       // dv = (length / 2) sin theta d theta, scaled so that the two make up the depth of the cell exactly.
       const depthOfCell = toPlace(start, length, 2 * half * (k + 1)) - toPlace(start, length, 2 * half * k)
       const scale = depthOfCell / (Math.sin(lower) + Math.sin(upper))
+      stations.widest = Math.max(stations.widest, depthOfCell)
       stations.weight[2 * cell] = scale * Math.sin(lower)
       stations.weight[2 * cell + 1] = scale * Math.sin(upper)
     }

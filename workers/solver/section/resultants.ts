@@ -26,6 +26,12 @@ export const resultantCount = 5
 
 /** Stress and tangent of the law evaluated last. */
 const answer = new Float64Array(2)
+/**
+ * A cell over which the strain changes by more than this share of the law's peak strain is taken in parts: two stations would
+ * miss a curve that rises and falls within it. Their number follows from the curvature alone, so that N stays smooth in eps0.
+ */
+const partStrain = 0.5
+const mostParts = 16
 /** v of the kinks of the law at hand. */
 const kinkV = new Float64Array(8)
 
@@ -150,7 +156,7 @@ function accumulateConcrete(
   kappa: number,
   out: Float64Array,
 ): void {
-  const { edges } = model.stations
+  const { edges, widest } = model.stations
   const cells = edges.length - 1
   const { kinks } = law
   const spalls = kinks.length > 1
@@ -166,11 +172,19 @@ function accumulateConcrete(
   for (let k = 0; k < kinks.length; k++) kinkV[k] = (kinks[k] - eps0) / kappa
   const crackCell = findCell(edges, kinkV[0])
   const endCell = spalls ? findCell(edges, kinkV[kinks.length - 1]) : cells
+  const parts = Math.min(mostParts, Math.ceil((kappa * widest) / (partStrain * law.peakStrain)))
   for (let r = 0; r < ranges.length; r += 2) {
     const from = ranges[r]
     const to = ranges[r + 1]
+    if (parts > 1) {
+      const last = Math.min(to - 1, endCell)
+      for (let cell = Math.max(from, crackCell); cell <= last; cell++) {
+        accumulateSplitCell(model, law, weights, cell, eps0, kappa, parts, out)
+      }
+      continue
+    }
     if (crackCell >= from && crackCell < to) {
-      accumulateSplitCell(model, law, weights, crackCell, eps0, kappa, out)
+      accumulateSplitCell(model, law, weights, crackCell, eps0, kappa, parts, out)
     }
     let next = Math.max(from, crackCell + 1)
     const stop = Math.min(to, endCell)
@@ -178,12 +192,12 @@ function accumulateConcrete(
       const kinkCell = findCell(edges, kinkV[k])
       if (kinkCell < next || kinkCell >= stop) continue
       accumulateCells(model, law, weights, next, kinkCell, eps0, kappa, out)
-      accumulateSplitCell(model, law, weights, kinkCell, eps0, kappa, out)
+      accumulateSplitCell(model, law, weights, kinkCell, eps0, kappa, parts, out)
       next = kinkCell + 1
     }
     accumulateCells(model, law, weights, next, stop, eps0, kappa, out)
     if (spalls && endCell > crackCell && endCell >= from && endCell < to) {
-      accumulateSplitCell(model, law, weights, endCell, eps0, kappa, out)
+      accumulateSplitCell(model, law, weights, endCell, eps0, kappa, parts, out)
     }
   }
 }
@@ -244,7 +258,7 @@ function accumulateCells(
 }
 
 /**
- * One cell with kinks inside: Gauss on each part between them. At a pole the width grows like a square root, so there the
+ * One cell with kinks inside, or in parts: Gauss on each part between them. At a pole the width grows like a square root, so there the
  * parts are taken over the angle theta of the stations, in which it is linear; elsewhere over v.
  */
 function accumulateSplitCell(
@@ -254,6 +268,7 @@ function accumulateSplitCell(
   cell: number,
   eps0: number,
   kappa: number,
+  parts: number,
   out: Float64Array,
 ): void {
   const { stations } = model
@@ -284,28 +299,33 @@ function accumulateSplitCell(
     }
     // Below the first kink there is no stress, nor beyond the last one of concrete that spalls.
     if (k > 0 && to > from && !(k === kinkCount && kinkCount > 1)) {
-      const half = (to - from) / 2
-      const middle = (to + from) / 2
-      for (let side = 0; side < 2; side++) {
-        const place = middle + (side === 0 ? -gaussPoint : gaussPoint) * half
-        let at = place
-        let depth = half
-        if (atEnd) {
-          at = start + radius * (1 - Math.cos(place))
-          // The two depths make up that of the part, as in stations.ts.
-          const mirrored = 2 * middle - place
-          const sine = Math.sin(place)
-          depth = (radius * (Math.cos(from) - Math.cos(to)) * sine) / (sine + Math.sin(mirrored))
+      const step = (to - from) / parts
+      const half = step / 2
+      for (let part = 0; part < parts; part++) {
+        const begin = from + part * step
+        const middle = begin + half
+        for (let side = 0; side < 2; side++) {
+          const place = middle + (side === 0 ? -gaussPoint : gaussPoint) * half
+          let at = place
+          let depth = half
+          if (atEnd) {
+            at = start + radius * (1 - Math.cos(place))
+            // The two depths make up that of the part, as in stations.ts.
+            const mirrored = 2 * middle - place
+            const sine = Math.sin(place)
+            const whole = radius * (Math.cos(begin) - Math.cos(begin + step))
+            depth = (whole * sine) / (sine + Math.sin(mirrored))
+          }
+          evaluateConcrete(law, eps0 + kappa * at)
+          const area = depth * (w0 + slope * (place - first))
+          const force = answer[0] * area
+          const stiffness = answer[1] * area
+          N += force
+          M += force * at
+          Na += stiffness
+          Nk += stiffness * at
+          Mk += stiffness * at * at
         }
-        evaluateConcrete(law, eps0 + kappa * at)
-        const area = depth * (w0 + slope * (place - first))
-        const force = answer[0] * area
-        const stiffness = answer[1] * area
-        N += force
-        M += force * at
-        Na += stiffness
-        Nk += stiffness * at
-        Mk += stiffness * at * at
       }
     }
     from = to
