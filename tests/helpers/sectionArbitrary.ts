@@ -8,7 +8,6 @@ import { readDocument } from '#shared/document/readDocument.ts'
 import { computeOutlineArea } from '#shared/geometry/outline.ts'
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true })
-const share = between(0, 1)
 
 interface SpiralDraw {
   size: number
