@@ -18,15 +18,10 @@ import { computeOutlineArea } from '#shared/geometry/outline.ts'
 import { listWarnings } from '../detailing/warnings.ts'
 import { createEquilibriumSolver, findStart, type StartRange } from '../section/equilibrium.ts'
 import { computeCrossMoment } from '../section/resultants.ts'
-import {
-  createSectionModel,
-  defaultStrips,
-  type ModelOptions,
-  type SectionModel,
-} from '../section/sectionModel.ts'
+import { createSectionModel, type ModelOptions, type SectionModel } from '../section/sectionModel.ts'
 import { readState, type BranchState } from './branch.ts'
 import { idealiseCurve } from './idealise.ts'
-import { insertRows, layRows } from './rows.ts'
+import { findRow, insertRows, layRows } from './rows.ts'
 import { findDrop, locatePeak, walkBranch, type BranchContext, type ReachedLimit } from './walk.ts'
 import { findBarExtent, listWatchedStrains } from './watched.ts'
 import { listWorking } from './working.ts'
@@ -40,39 +35,34 @@ export type MomentCurvatureSolution = Pick<
 /** Tensile strain to which a section is followed at zero curvature where its bars have no limit strain. */
 const leastStrainWithoutLimit = -0.1
 
-/** A fold of the branch is believed when refining the strips by this factor moves it by less than `foldMoves`. */
-const refinement = 4
-const mostRefinements = 3
-/** Relative to the curvature. */
-const foldMoves = 1e-3
+/** Strips where the branch folds or all but folds: errors fall with the fourth power of their number. */
+const strictStrips = 420
+/**
+ * The branch all but folds where d eps0 / d kappa exceeds this share of the depth: the strain then turns about a point far
+ * outside the section, since softening concrete cancels nearly all axial stiffness.
+ */
+const foldingSlope = 2
 
 /**
- * The curve of a filled, sound document. Where it ends by a fold of the branch, the strips are refined until the fold stays:
- * coarse integration of a strongly softening section makes folds that are not there.
+ * The curve of a filled, sound document. Whether a strongly softening section folds hangs on a small difference of large
+ * stiffnesses, so such curves are solved again on finer strips. Strips that are asked for are taken as they are.
  */
 export function solveMomentCurvature(
   document: AnalysisDocument,
   options: ModelOptions = {},
 ): MomentCurvatureSolution {
-  let solution = solveOnStrips(document, options)
-  let strips = options.strips ?? defaultStrips
-  for (let i = 0; i < mostRefinements && isFold(solution); i++) {
-    strips *= refinement
-    const finer = solveOnStrips(document, { ...options, strips })
-    const before = solution.points.curvature.at(-1) ?? 0
-    const after = finer.points.curvature.at(-1) ?? 0
-    const stays = isFold(finer) && Math.abs(after - before) <= foldMoves * after
-    solution = finer
-    if (stays) break
-  }
-  return solution
+  const { solution, folding } = solveOnStrips(document, options)
+  if (!folding || options.strips !== undefined) return solution
+  return solveOnStrips(document, { ...options, strips: strictStrips }).solution
 }
 
-function isFold({ stop, points }: MomentCurvatureSolution): boolean {
-  return stop.reason === 'no-equilibrium' && points.curvature.length > 0
+interface StripSolution {
+  solution: MomentCurvatureSolution
+  /** The branch folds or comes near it. */
+  folding: boolean
 }
 
-function solveOnStrips(document: AnalysisDocument, options: ModelOptions): MomentCurvatureSolution {
+function solveOnStrips(document: AnalysisDocument, options: ModelOptions): StripSolution {
   const { analysis, materials } = document
   const load = analysis.axialLoad
   const model = createSectionModel(document, computeOutlineArea(document.section.outline), options)
@@ -81,7 +71,8 @@ function solveOnStrips(document: AnalysisDocument, options: ModelOptions): Momen
 
   const startStrain = findStart(model, load, computeStartRange(document, model), solver)
   if (Number.isNaN(startStrain)) {
-    return assemble(document, model, [], [], { reason: 'no-equilibrium' }, solver.total)
+    const solution = assemble(document, model, [], [], { reason: 'no-equilibrium' }, solver.total)
+    return { solution, folding: false }
   }
   const start = readState(solver, load, 0, startStrain)
   const watched = listWatchedStrains(document, model)
@@ -89,7 +80,10 @@ function solveOnStrips(document: AnalysisDocument, options: ModelOptions): Momen
   const onCurve = walk.reached.map((one) => one.state)
   const rows = layRows(context, walk.states, analysis.points, onCurve)
   const { states, reached } = addMomentStates(context, rows, walk.reached)
-  return assemble(document, model, states, reached, walk.stop, solver.total)
+  const folding =
+    walk.stop.reason === 'no-equilibrium' ||
+    walk.states.some((state) => Math.abs(state.strainSlope) > foldingSlope * context.depth)
+  return { solution: assemble(document, model, states, reached, walk.stop, solver.total), folding }
 }
 
 /** Strains between which the section at zero curvature is followed. */
@@ -126,10 +120,14 @@ function addMomentStates(
     { kind: 'peak-moment' as const, state: peak },
     ...(drop ? [{ kind: 'moment-drop-20' as const, state: drop }] : []),
   ]
+  const states = insertRows(rows, drop ? [peak, drop] : [peak])
   return {
-    states: insertRows(rows, drop ? [peak, drop] : [peak]),
-    // Sorting is stable: what is reached together stays in the order of the document.
-    reached: located.sort((a, b) => a.state.kappa - b.state.kappa),
+    states,
+    // A state so near a row that it is no row of its own stands on that row. Sorting is stable: what is reached together stays
+    // in the order of the document.
+    reached: located
+      .map((one) => ({ ...one, state: findRow(states, one.state) }))
+      .sort((a, b) => a.state.kappa - b.state.kappa),
   }
 }
 

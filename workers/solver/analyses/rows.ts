@@ -57,6 +57,12 @@ export function insertRows(rows: readonly BranchState[], extra: readonly BranchS
   return all
 }
 
+/** The row that stands for a state: itself, or one so near that they are one. */
+export function findRow(rows: readonly BranchState[], state: BranchState): BranchState {
+  const near = sameRow * rows[rows.length - 1].kappa
+  return rows.find((row) => Math.abs(row.kappa - state.kappa) <= near) ?? state
+}
+
 function computeCumulativeDensity(states: readonly BranchState[]): number[] {
   const stop = states[states.length - 1].kappa
   const greatest = states.reduce((most, state) => Math.max(most, Math.abs(state.moment)), 0)

@@ -70,7 +70,7 @@ export interface SectionModel {
 }
 
 /** Strips over the depth of a section where nothing else is asked for. */
-export const defaultStrips = 70
+const defaultStrips = 70
 
 export interface ModelOptions {
   /** Strips over the depth; pieces between breaks have their own on top. @default 70 */
