@@ -34,6 +34,8 @@ const stepGrowth = 1.1
 const stepsToLimit = 110
 /** Relative to the curvature. */
 const foldTolerance = 2e-7
+/** How far, by the depth, a mean slope may lie beside the slopes at the ends of a step. */
+const jumpShare = 0.5
 /** Relative difference of curvatures that count as one. */
 const tie = 1e-7
 /** Relative change of the curvature with which a limit state counts as located. */
@@ -85,6 +87,11 @@ export function walkBranch(
       failedAt = kappa
       continue
     }
+    if (isJump(from, to, depth)) {
+      step = (kappa - from.kappa) / 2
+      if (step <= foldTolerance * kappa) return { states, reached, stop: { reason: 'no-equilibrium' } }
+      continue
+    }
 
     const crossed = [...open].flatMap((limit): ReachedLimit[] => {
       if (computeExcess(limit, to) < 0) return []
@@ -123,6 +130,16 @@ export function walkBranch(
     step *= to.iterations <= 4 ? stepGrowth : 1
     step = Math.min(step, limitKappa / stepsToLimit)
   }
+}
+
+/**
+ * The step led past a fold to another branch: on one branch the mean slope of a step lies about between the slopes at its
+ * ends.
+ */
+function isJump(from: BranchState, to: BranchState, depth: number): boolean {
+  const mean = (to.eps0 - from.eps0) / (to.kappa - from.kappa)
+  const middle = (from.strainSlope + to.strainSlope) / 2
+  return Math.abs(mean - middle) > Math.abs(to.strainSlope - from.strainSlope) + jumpShare * depth
 }
 
 function toStop(limit: WatchedStrain): Walk['stop'] {
