@@ -10,7 +10,7 @@ export function nameLimitState({ kind, item }: Pick<LimitState, 'kind' | 'item'>
     case 'bar-yield-compression':
       return `bars ${item} yield, compressed`
     case 'bar-0.015':
-      return `bar tension 0.015, ${item}`
+      return `bars ${item} strain 0.015`
     case 'bar-rupture':
       return `bars ${item} rupture`
     case 'concrete-0.002':
