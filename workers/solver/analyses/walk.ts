@@ -34,8 +34,8 @@ const stepGrowth = 1.1
 const stepsToLimit = 110
 /** Relative to the curvature. */
 const foldTolerance = 2e-7
-/** How far, by the depth, a mean slope may lie beside the slopes at the ends of a step. */
-const jumpShare = 0.5
+/** Strain by which a step may miss what the slopes at its ends tell. */
+const leastJump = 3e-4
 /** Relative difference of curvatures that count as one. */
 const tie = 1e-7
 /** Relative change of the curvature with which a limit state counts as located. */
@@ -87,7 +87,7 @@ export function walkBranch(
       failedAt = kappa
       continue
     }
-    if (isJump(from, to, depth)) {
+    if (isJump(from, to)) {
       step = (kappa - from.kappa) / 2
       if (step <= foldTolerance * kappa) return { states, reached, stop: { reason: 'no-equilibrium' } }
       continue
@@ -133,13 +133,12 @@ export function walkBranch(
 }
 
 /**
- * The step led past a fold to another branch: on one branch the mean slope of a step lies about between the slopes at its
- * ends.
+ * The step may have led past a fold to another branch: on one branch the strain changes by about the mean of the slopes at
+ * the ends of a step, the better the shorter the step; past a fold the difference stays.
  */
-function isJump(from: BranchState, to: BranchState, depth: number): boolean {
-  const mean = (to.eps0 - from.eps0) / (to.kappa - from.kappa)
-  const middle = (from.strainSlope + to.strainSlope) / 2
-  return Math.abs(mean - middle) > Math.abs(to.strainSlope - from.strainSlope) + jumpShare * depth
+function isJump(from: BranchState, to: BranchState): boolean {
+  const expected = ((from.strainSlope + to.strainSlope) / 2) * (to.kappa - from.kappa)
+  return Math.abs(to.eps0 - from.eps0 - expected) > leastJump
 }
 
 function toStop(limit: WatchedStrain): Walk['stop'] {
