@@ -12,12 +12,12 @@ const superscripts: Record<string, string> = Object.fromEntries(
   [...'-0123456789'].map((sign, i) => [sign, [...'⁻⁰¹²³⁴⁵⁶⁷⁸⁹'][i]]),
 )
 
-/** `digits` significant figures; thousands grouped from 10 000 on by default; never exponent notation above 1e-7. */
+/** `digits` significant figures; thousands grouped from 10 000 on by default; a power of ten below 0.0001. */
 export function formatNumber(value: number | null | undefined, digits = 4): string {
   if (value === null || value === undefined || !Number.isFinite(value)) return noNumber
   if (value === 0) return '0'
   const magnitude = Math.floor(Math.log10(Math.abs(Number(value.toPrecision(digits)))))
-  if (magnitude < -7 || magnitude > 14) return writePower(value, digits)
+  if (magnitude < -4 || magnitude > 14) return writePower(value, digits)
   const decimals = Math.max(0, digits - 1 - magnitude)
   const [whole, fraction] = Math.abs(value).toFixed(decimals).split('.')
   const grouped = whole.length > 4 ? whole.replace(/\B(?=(\d{3})+$)/g, narrowSpace) : whole

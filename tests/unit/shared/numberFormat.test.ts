@@ -8,56 +8,52 @@ import {
   noNumber,
 } from '#shared/numberFormat.ts'
 
-const narrow = '\u202F'
+/** The narrow space between thousands and before units, as a plain one. */
+const plain = (text: string) => text.replaceAll('\u202F', ' ')
 
-describe('numbers as written', () => {
+describe('formatNumber', () => {
   it.each([
-    [0, '0'],
-    [-0, '0'],
-    [1, '1.000'],
-    [9999.6, `10${narrow}000`],
-    [1234.5, '1235'],
-    [12345.6, `12${narrow}346`],
-    [-1234567, `\u22121${narrow}234${narrow}567`],
-    [0.0000648667, '0.00006487'],
-    [1.5e-9, `1.500${narrow}×${narrow}10⁻⁹`],
-    [-2e15, `\u22122.000${narrow}×${narrow}10¹⁵`],
-  ])('%s is %s', (value, text) => {
-    expect(formatNumber(value)).toBe(text)
+    [0, 4, '0'],
+    [0.0053604, 4, '0.005360'],
+    [13.12993, 3, '13.1'],
+    [9999.6, 4, '10 000'],
+    [17713.159, 4, '17 713'],
+    [2242800, 4, '2 242 800'],
+    [-0.015, 3, '−0.0150'],
+    [1234.5, 5, '1234.5'],
+    [2.5e-14, 2, '2.5 × 10⁻¹⁴'],
+    [1e-6, 1, '1 × 10⁻⁶'],
+  ])('writes %d in %d figures as %s', (value, digits, wanted) => {
+    expect(plain(formatNumber(value, digits))).toBe(wanted)
   })
 
-  it('what is no number is a dash', () => {
-    for (const value of [null, undefined, Number.NaN, Infinity]) expect(formatNumber(value)).toBe(noNumber)
-    expect(formatQuantity('force', null)).toBe(noNumber)
-    expect(formatWithUnit('force', undefined)).toBe(noNumber)
-  })
-
-  it('a quantity is written in its unit, with as many figures as asked', () => {
-    expect(formatQuantity('moment', 880_400_000)).toBe('880.4')
-    expect(formatWithUnit('moment', 880_400_000, 3)).toBe(`880${narrow}kN·m`)
-    expect(formatWithUnit('angle', 45, 2)).toBe('45°')
-    expect(formatWithUnit('ratio', 15.95)).toBe('15.95')
+  it('shows a dash where there is no number', () => {
+    for (const none of [null, undefined, Number.NaN, Infinity]) expect(formatNumber(none)).toBe(noNumber)
   })
 })
 
-describe('inputs as they were given', () => {
+describe('formatGiven', () => {
   it.each([
+    [80, '80'],
+    [201.061930000001, '201.062'],
+    [0.002, '0.002'],
+    [12000, '12 000'],
+    [1500.5, '1500.5'],
+    [-485, '−485'],
     [0, '0'],
-    [1084, '1084'],
-    [0.005, '0.005'],
-    [22.5, '22.5'],
-    [201.06193, '201.062'],
-    [31622.7766, `31${narrow}622.8`],
-    [-90, '\u221290'],
-    [12_000_000, `12${narrow}000${narrow}000`],
-    [null, noNumber],
-  ])('%s is %s', (value, text) => {
-    expect(formatGiven(value)).toBe(text)
+  ])('writes %d as it was given: %s', (value, wanted) => {
+    expect(plain(formatGiven(value))).toBe(wanted)
   })
+})
 
-  it('with their unit', () => {
-    expect(formatInput('force', 5_400_000)).toBe(`5400${narrow}kN`)
-    expect(formatInput('length', 12.5)).toBe(`12.5${narrow}mm`)
-    expect(formatInput('length', undefined)).toBe(noNumber)
+describe('units', () => {
+  it('converts to the unit shown and names it', () => {
+    expect(plain(formatWithUnit('moment', 17713159093, 5))).toBe('17 713 kN·m')
+    expect(plain(formatWithUnit('curvature', 4.2434e-5))).toBe('0.04243 1/m')
+    expect(plain(formatInput('force', 12_000_000))).toBe('12 000 kN')
+    expect(formatWithUnit('angle', 45, 2)).toBe('45°')
+    expect(formatWithUnit('strain', 0.004, 2)).toBe('0.0040')
+    expect(formatQuantity('massPerLength', 0.0858, 3)).toBe('85.8')
+    expect(formatWithUnit('force', null)).toBe(noNumber)
   })
 })
