@@ -77,7 +77,7 @@ const draw = fc.record({
   angle: fc.oneof(between(0, 360), fc.constantFrom(0, 45, 90)),
   idealisation: fc.constantFrom('first-yield-nominal', 'equal-area-beyond-yield', 'equal-area-from-zero'),
 })
-type Draw = fc.TypeOfArbitrary<typeof draw>
+type Draw = typeof draw extends fc.Arbitrary<infer T> ? T : never
 
 function toOutline({ kind, width, ratio, chamfer, notch }: Draw) {
   const depth = width * ratio
