@@ -2,7 +2,7 @@
  * Moment-curvature of a section under an axial load: curvature-driven, on the branch of equilibrium connected with zero
  * curvature. Free of path: every fiber follows its first-loading law at its present strain.
  *
- * Stopping test at every row: |N - load| <= 1e-8 f'co Ag (the contract asks for 1e-6). Outcomes are values: a section
+ * Stopping test at every row: |N - load| <= 1e-7 f'co Ag (the contract asks for 1e-6). Outcomes are values: a section
  * without equilibrium at zero curvature gives empty points and the reason `no-equilibrium`; a fold of the branch ends
  * the curve with the same reason and the rows up to it.
  */
