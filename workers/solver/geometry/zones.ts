@@ -26,7 +26,7 @@ export function computeZones(
   voids: readonly TurnedCircle[],
   circles: readonly TurnedCircle[],
 ): ZoneGeometry[] {
-  const zones = new Map<string, ZoneGeometry>()
+  const zones = new Map<number | string, ZoneGeometry>()
   const ends = new Float64Array(outline.most)
   const cuts = createCutList(outline.most + 2 * (voids.length + circles.length))
   const spiralChords = createChordList(circles)
@@ -46,11 +46,11 @@ export function computeZones(
         const a = cuts.ends[i]
         const b = cuts.ends[i + 1]
         const middle = (a + b) / 2
-        if (b <= a || voidChords.listAround(middle).length > 0) continue
-        const inside = spiralChords.listAround(middle)
-        const key = inside.join()
+        if (b <= a || voidChords.holds(middle)) continue
+        const key = spiralChords.nameSet(middle)
         let zone = zones.get(key)
         if (!zone) {
+          const inside = spiralChords.listAround(middle)
           const size = stations.v.length
           zone = { spirals: inside, area: new Float64Array(size), uMoment: new Float64Array(size), total: 0 }
           zones.set(key, zone)
@@ -70,6 +70,10 @@ export function computeZones(
     .filter((zone) => zone.total > sliver * gross)
     .sort((a, b) => compareSets(a.spirals, b.spirals))
 }
+
+/** Sums of so many powers of two are exact. */
+const mostExactPowers = 52
+const powers = Array.from({ length: mostExactPowers }, (_, c) => 2 ** c)
 
 /** The shorter set first where one begins the other, else by the first index that differs. */
 function compareSets(a: readonly number[], b: readonly number[]): number {
@@ -127,6 +131,17 @@ function createChordList(circles: readonly TurnedCircle[]) {
         cuts.insert(from[c])
         cuts.insert(to[c])
       }
+    },
+    holds(u: number): boolean {
+      for (let c = 0; c < circles.length; c++) if (from[c] < u && u < to[c]) return true
+      return false
+    },
+    /** A key of the set of circles whose chord holds u: a sum of powers of two while those are exact. */
+    nameSet(u: number): number | string {
+      if (circles.length > mostExactPowers) return this.listAround(u).join()
+      let key = 0
+      for (let c = 0; c < circles.length; c++) if (from[c] < u && u < to[c]) key += powers[c]
+      return key
     },
     /** Indices of the circles whose chord holds u, ascending. */
     listAround(u: number): number[] {

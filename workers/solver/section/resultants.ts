@@ -215,6 +215,8 @@ function accumulateCells(
 ): void {
   const { v } = model.stations
   const { top, inverseWidth, coefficients, headTop, headInverseWidth, headStart } = law.table
+  const { lineSlope } = law
+  const lineEnd = law.kinks[law.kinks.length - 1]
   let N = 0
   let M = 0
   let Na = 0
@@ -237,6 +239,10 @@ function accumulateCells(
       const c3 = coefficients[c + 3]
       stress = coefficients[c] + t * (coefficients[c + 1] + t * (c2 + t * c3))
       tangent = (coefficients[c + 1] + t * (2 * c2 + 3 * c3 * t)) * inverse
+    } else if (lineSlope !== 0) {
+      // Cells past the last kink are not asked for.
+      stress = lineSlope * (eps - lineEnd)
+      tangent = lineSlope
     } else {
       evaluateConcrete(law, eps)
       stress = answer[0]
