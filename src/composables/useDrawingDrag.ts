@@ -1,22 +1,20 @@
 /**
- * Dragging parts of a section: every step is computed from the section as it was when the drag began, so that nothing
- * accumulates; steps are sent once a frame; the end makes one undo step, Escape goes back to the beginning.
+ * Dragging parts of a section. Steps are sent once a frame with `later`; the end sends one `now`; Escape, or a pointer
+ * that is taken away, sends the section as it was before and nothing after it.
  */
 import { useEventListener } from '@vueuse/core'
-import { onScopeDispose, ref, type Ref } from 'vue'
+import { onScopeDispose, readonly, ref, type Ref } from 'vue'
 import type { Point, Section } from '#shared/document/analysisDocument.ts'
-import type { Grip } from '@/components/section/drawing/HandleLayer.vue'
-import { resizeRing, turnRing } from '@/drawing/edits/ringEdits.ts'
-import { moveSpiral, resizeSpiral } from '@/drawing/edits/spiralEdits.ts'
-import { findMirrorPartners } from '@/drawing/mirrorPartners.ts'
-import type { Selection } from '@/drawing/selection.ts'
-import { snapCentre, snapLength } from '@/drawing/snapping.ts'
+import { computeDragStep } from '@/drawing/dragStep.ts'
+import type { Grip } from '@/drawing/selection.ts'
 import type { ViewTransform } from '@/drawing/viewTransform.ts'
 
 export interface DrawingDrag {
-  active: Ref<boolean>
+  active: Readonly<Ref<boolean>>
+  /** The part goes alone, without those that are kept alike with it. */
+  alone: Readonly<Ref<boolean>>
   /** Why the part rests where it does. */
-  reason: Ref<string>
+  reason: Readonly<Ref<string>>
   start(grip: Grip, event: PointerEvent, svg: SVGSVGElement): void
   move(event: PointerEvent): void
   end(event: PointerEvent): void
@@ -26,139 +24,142 @@ export interface DrawingDrag {
 interface DrawingDragOptions {
   section: () => Section
   view: () => ViewTransform
-  select: (selection: Selection) => void
+  /** Chosen for the part; Alt does the same for as long as it is held. */
+  alone: () => boolean
   edit: (section: Section, commit: 'later' | 'now') => void
 }
 
 /** px within which a snap catches */
-const snapReach = 8
+const snapReach = 5
 /** px a pointer must travel before it is a drag and not a click */
 const slack = 3
 
-export function useDrawingDrag({ section, view, select, edit }: DrawingDragOptions): DrawingDrag {
+interface Held {
+  grip: Grip
+  before: Section
+  svg: SVGSVGElement
+  pointer: number
+  client: Point
+  from: Point
+  to: Point
+  free: boolean
+  turn: boolean
+}
+
+export function useDrawingDrag({ section, view, alone: isAlone, edit }: DrawingDragOptions): DrawingDrag {
   const active = ref(false)
+  const alone = ref(false)
   const reason = ref('')
-  let grip: Grip | null = null
-  let before: Section | null = null
-  let svg: SVGSVGElement | null = null
-  let startedAt: Point = [0, 0]
-  let startedMm: Point = [0, 0]
-  let moved = false
-  let latest: { place: Point; free: boolean; turn: boolean } | null = null
+  let held: Held | null = null
   let frame = 0
 
-  function start(taken: Grip, event: PointerEvent, element: SVGSVGElement) {
-    if (event.button !== 0) return
-    event.preventDefault()
-    element.focus({ preventScroll: true })
-    element.setPointerCapture(event.pointerId)
-    grip = taken
-    svg = element
-    before = section()
-    startedAt = [event.clientX, event.clientY]
-    startedMm = toMm(event)
-    moved = false
+  function start(grip: Grip, event: PointerEvent, svg: SVGSVGElement) {
+    if (held || event.button !== 0) return
+    svg.setPointerCapture(event.pointerId)
+    const from = toMm(svg, event)
+    held = {
+      grip,
+      before: section(),
+      svg,
+      pointer: event.pointerId,
+      client: [event.clientX, event.clientY],
+      from,
+      to: from,
+      free: false,
+      turn: false,
+    }
     reason.value = ''
-    select(taken.kind === 'ring' ? { kind: 'bars', group: taken.group } : { kind: 'spiral', id: taken.id })
   }
 
   function move(event: PointerEvent) {
-    if (!grip) return
-    if (!moved && Math.hypot(event.clientX - startedAt[0], event.clientY - startedAt[1]) < slack) return
-    moved = true
+    if (!held || event.pointerId !== held.pointer) return
+    const travelled = Math.hypot(event.clientX - held.client[0], event.clientY - held.client[1])
+    if (!active.value && travelled < slack) return
     active.value = true
-    latest = { place: toMm(event), free: event.altKey, turn: event.shiftKey }
+    held.to = toMm(held.svg, event)
+    take(event)
+    schedule()
+  }
+
+  function take(keys: { altKey: boolean; ctrlKey: boolean; metaKey: boolean; shiftKey: boolean }) {
+    if (!held) return
+    alone.value = keys.altKey || isAlone()
+    held.free = keys.ctrlKey || keys.metaKey
+    held.turn = keys.shiftKey
+  }
+
+  function schedule() {
     if (frame === 0) frame = requestAnimationFrame(step)
   }
 
   function step() {
     frame = 0
-    const next = compute()
-    if (next) edit(next, 'later')
+    send('later')
+  }
+
+  function send(commit: 'later' | 'now') {
+    if (!held) return
+    const { grip, before, from, to, free, turn } = held
+    const reach = snapReach / view().scale
+    const next = computeDragStep({ before, grip, from, to, reach, alone: alone.value, free, turn })
+    reason.value = next.reason
+    edit(next.section, commit)
   }
 
   function end(event: PointerEvent) {
-    if (!grip) return
-    if (moved) {
-      latest = { place: toMm(event), free: event.altKey, turn: event.shiftKey }
-      const next = compute()
-      if (next) edit(next, 'now')
+    if (!held || event.pointerId !== held.pointer) return
+    if (active.value) {
+      held.to = toMm(held.svg, event)
+      take(event)
+      send('now')
     }
     finish()
   }
 
   function giveUp() {
-    if (grip && moved && before) edit(before, 'later')
+    if (held && active.value) {
+      reason.value = ''
+      edit(held.before, 'later')
+    }
     finish()
   }
 
   function finish() {
     cancelAnimationFrame(frame)
     frame = 0
-    grip = null
-    before = null
-    latest = null
+    held = null
     active.value = false
-    reason.value = ''
+    alone.value = false
   }
 
-  /** The section with the part where the pointer is now. */
-  function compute(): Section | null {
-    if (!grip || !before || !latest) return null
-    const { place, free, turn } = latest
-    if (grip.kind === 'ring') return computeRing(before, grip.group, place, free, turn)
-    const { id } = grip
-    const spiral = before.spirals.find((one) => one.id === id)
-    if (!spiral) return null
-    const partners = free ? [] : findMirrorPartners(before.spirals, id)
-    const alike = partners.length > 0 ? 'kept alike' : ''
-    if (grip.kind === 'resize-spiral') {
-      const radius = Math.hypot(place[0] - spiral.centre[0], place[1] - spiral.centre[1])
-      reason.value = alike
-      return resizeSpiral(before, id, snapLength(2 * radius, free), partners)
-    }
-    const wanted: Point = [
-      spiral.centre[0] + place[0] - startedMm[0],
-      spiral.centre[1] + place[1] - startedMm[1],
-    ]
-    const snapped = snapCentre(wanted, spiral, before.outline, snapReach / view().scale, free)
-    reason.value = [snapped.reason, alike].filter(Boolean).join(', ')
-    return moveSpiral(before, id, snapped.point, partners)
+  function toMm(svg: SVGSVGElement, event: PointerEvent): Point {
+    const box = svg.getBoundingClientRect()
+    return view().toMm(event.clientX - box.left, event.clientY - box.top)
   }
 
-  function computeRing(
-    from: Section,
-    group: number,
-    place: Point,
-    free: boolean,
-    turn: boolean,
-  ): Section | null {
-    const layout = from.bars[group]?.layout
-    if (layout?.kind !== 'ring') return null
-    const dx = place[0] - layout.centre[0]
-    const dy = place[1] - layout.centre[1]
-    if (turn) {
-      const startedAngle = Math.atan2(startedMm[1] - layout.centre[1], startedMm[0] - layout.centre[0])
-      const by = ((Math.atan2(dy, dx) - startedAngle) * 180) / Math.PI
-      reason.value = 'turning'
-      return turnRing(from, group, layout.startAngle + by)
-    }
-    reason.value = free ? 'free' : ''
-    return resizeRing(from, group, snapLength(2 * Math.hypot(dx, dy), free))
-  }
-
-  function toMm(event: PointerEvent): Point {
-    const box = svg?.getBoundingClientRect()
-    return view().toMm(event.clientX - (box?.left ?? 0), event.clientY - (box?.top ?? 0))
-  }
-
-  useEventListener(globalThis.window, 'keydown', (event: KeyboardEvent) => {
-    if (event.key === 'Escape' && grip) {
+  // Before the drawing's own keys: during a drag Escape belongs to it, and a key that changes it acts at once.
+  function heedKey(event: KeyboardEvent) {
+    if (!held) return
+    if (event.key === 'Escape' && event.type === 'keydown') {
       event.stopPropagation()
       giveUp()
+    } else if (active.value && ['Alt', 'Shift', 'Control', 'Meta'].includes(event.key)) {
+      // Alt alone would open the menu of the browser.
+      event.preventDefault()
+      take(event)
+      schedule()
     }
-  })
+  }
+  useEventListener(globalThis.window, ['keydown', 'keyup'], heedKey, { capture: true })
   onScopeDispose(finish)
 
-  return { active, reason, start, move, end, giveUp }
+  return {
+    active: readonly(active),
+    alone: readonly(alone),
+    reason: readonly(reason),
+    start,
+    move,
+    end,
+    giveUp,
+  }
 }

@@ -4,36 +4,39 @@ import type { Point, Spiral } from '#shared/document/analysisDocument.ts'
 export interface Partner {
   id: string
   map(point: Point): Point
+  /** 1: the map turns the plane, so angles keep their sense; -1: it mirrors, so they run the other way. */
+  sense: 1 | -1
 }
 
 /** How near (mm) two centres must be to count as mirror images. */
 const near = 0.5
 
-const mirrors: ((point: Point) => Point)[] = [
-  ([x, y]) => [-x, y],
-  ([x, y]) => [x, -y],
-  ([x, y]) => [-x, -y],
-  ([x, y]) => [y, x],
-  ([x, y]) => [-y, -x],
-  ([x, y]) => [-y, x],
-  ([x, y]) => [y, -x],
+/** Mirrors about the axes and the diagonals, and the turns that two of them make. */
+const symmetries: { map: (point: Point) => Point; sense: 1 | -1 }[] = [
+  { map: ([x, y]) => [0 - x, y], sense: -1 },
+  { map: ([x, y]) => [x, 0 - y], sense: -1 },
+  { map: ([x, y]) => [0 - x, 0 - y], sense: 1 },
+  { map: ([x, y]) => [y, x], sense: -1 },
+  { map: ([x, y]) => [0 - y, 0 - x], sense: -1 },
+  { map: ([x, y]) => [0 - y, x], sense: 1 },
+  { map: ([x, y]) => [y, 0 - x], sense: 1 },
 ]
 
 /**
- * Spirals of the same make whose centres are mirror images of this one's about the axes, the middle or the diagonals.
- * Each is found once, by the first mirror that reaches it.
+ * Spirals of the same make whose centres are mirror images of this one's about the axes or the diagonals.
+ * Each is found once, by the first symmetry that reaches it.
  */
 export function findMirrorPartners(spirals: readonly Spiral[], id: string): Partner[] {
   const first = spirals.find((spiral) => spiral.id === id)
   if (!first) return []
   const partners: Partner[] = []
-  for (const map of mirrors) {
+  for (const { map, sense } of symmetries) {
     const [x, y] = map(first.centre)
     for (const other of spirals) {
       if (other.id === id || !isAlike(first, other)) continue
       if (partners.some((partner) => partner.id === other.id)) continue
       if (Math.abs(other.centre[0] - x) > near || Math.abs(other.centre[1] - y) > near) continue
-      partners.push({ id: other.id, map })
+      partners.push({ id: other.id, map, sense })
     }
   }
   return partners

@@ -5,33 +5,16 @@
 import type { BarGroup, Point, Section, Spiral, Void } from '#shared/document/analysisDocument.ts'
 import { computeDefaultBarArea } from '#shared/document/fillDefaults.ts'
 import { computeOutlineBounds } from '#shared/geometry/outline.ts'
+import { replaceSpirals } from '@/drawing/edits/ownRings.ts'
 
-/** Changes the named spirals; bar rings on the inside of a spiral keep their distance to its wire. */
+/** Changes the named spirals; their own rings of bars go with them and keep their distance to the wire. */
 export function editSpirals(
   section: Section,
   ids: readonly string[],
   change: (spiral: Spiral) => Spiral,
 ): Section {
-  let bars = section.bars
-  const spirals = section.spirals.map((spiral) => {
-    if (!ids.includes(spiral.id)) return spiral
-    const changed = change(spiral)
-    bars = bars.map((group) => carryRing(group, spiral, changed))
-    return changed
-  })
-  return { ...section, spirals, bars }
-}
-
-/** A ring of bars that is concentric with a spiral and lies inside it moves and grows with it. */
-function carryRing(group: BarGroup, before: Spiral, after: Spiral): BarGroup {
-  const { layout } = group
-  if (layout.kind !== 'ring') return group
-  const concentric = layout.centre[0] === before.centre[0] && layout.centre[1] === before.centre[1]
-  const gap = insideFace(before) - layout.diameter - group.barDiameter
-  if (!concentric || gap < -0.5 || gap > 40) return group
-  const diameter = layout.diameter + insideFace(after) - insideFace(before)
-  if (diameter < group.barDiameter) return group
-  return { ...group, layout: { ...layout, centre: after.centre, diameter: round(diameter) } }
+  const changed = section.spirals.filter(({ id }) => ids.includes(id))
+  return replaceSpirals(section, new Map(changed.map((spiral) => [spiral.id, change(spiral)])))
 }
 
 function insideFace(spiral: Spiral): number {
