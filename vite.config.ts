@@ -4,7 +4,8 @@ import vuetify from 'vite-plugin-vuetify'
 import { defineConfig } from 'vitest/config'
 
 const alias = { '@': fileURLToPath(new URL('./src', import.meta.url)) }
-const api = 'http://127.0.0.1:4780'
+/** Where the API listens while the page is developed. */
+const api = process.env.GIRDWELL_API ?? 'http://127.0.0.1:4780'
 
 export default defineConfig({
   plugins: [vue(), vuetify({ autoImport: true })],
