@@ -89,40 +89,42 @@ function findBest(
   obstacles: CalloutObstacles,
   placed: readonly Callout[],
 ): Callout | null {
-  let best: { callout: Callout; cost: number } | null = null
+  let best: { slot: Slot; target: number; turn: number; cost: number } | null = null
   for (const slot of slots) {
     const box = createBox(request, slot)
     if (box.left < room.left || box.right > room.right || box.top < room.top || box.bottom > room.bottom)
       continue
     if (obstacles.boxes.some((other) => doBoxesMeet(other, box, 5))) continue
     if (obstacles.areas.some((area) => doBoxesMeet(area, box))) continue
+    const bend = findBend(slot, box)
     request.targets.forEach((aim, target) => {
       for (const turn of aim.kind === 'edge' ? turns : [0]) {
-        const callout = draw(request, slot, target, aim, turn)
         const limit = best?.cost ?? Infinity
-        const cost = measure(callout, obstacles, placed, limit) + 6 * Math.abs(turn)
-        if (cost < limit) best = { callout, cost }
+        const end = findEnd(bend, aim, turn)
+        const cost = measure(bend, end, slot.side, obstacles, placed, limit) + 6 * Math.abs(turn)
+        if (cost < limit) best = { slot, target, turn, cost }
       }
     })
   }
-  return (best as { callout: Callout } | null)?.callout ?? null
+  const found = best as { slot: Slot; target: number; turn: number } | null
+  return found && draw(request, found.slot, found.target, request.targets[found.target], found.turn)
 }
 
 /** Length and slope of the leader, and what it crosses. */
 function measure(
-  callout: Callout,
+  bend: Place,
+  { x, y }: Place,
+  side: Slot['side'],
   obstacles: CalloutObstacles,
   placed: readonly Callout[],
   limit: number,
 ): number {
-  const bend = findBend(callout.slot, callout.box)
-  const { x, y } = callout.end
   const [dx, dy] = [x - bend.x, y - bend.y]
   const length = Math.hypot(dx, dy)
   const slope = (Math.atan2(Math.abs(dy), Math.abs(dx)) * 180) / Math.PI
   let cost = length + 0.6 * Math.abs(slope - 45)
   // A leader that turns back under its own words.
-  if (callout.slot.side === 'left' ? dx > -4 : dx < 4) cost += 500
+  if (side === 'left' ? dx > -4 : dx < 4) cost += 500
   if (cost >= limit) return cost
   for (const box of obstacles.boxes) if (doesLineMeetBox(bend.x, bend.y, x, y, box)) cost += 120
   for (const bar of obstacles.bars) {
@@ -140,10 +142,7 @@ function draw(request: CalloutRequest, slot: Slot, target: number, aim: Target, 
   const box = createBox(request, slot)
   const bend = findBend(slot, box)
   const start = slot.side === 'left' ? box.left - space : box.right + space
-  const angle = Math.atan2(bend.y - aim.y, bend.x - aim.x) + turn
-  const radius = aim.kind === 'edge' ? aim.radius : 0
-  const x = aim.x + radius * Math.cos(angle)
-  const y = aim.y + radius * Math.sin(angle)
+  const { x, y } = findEnd(bend, aim, turn)
   const length = Math.hypot(x - bend.x, y - bend.y) || 1
   return {
     key: request.key,
@@ -156,11 +155,23 @@ function draw(request: CalloutRequest, slot: Slot, target: number, aim: Target, 
   }
 }
 
+interface Place {
+  x: number
+  y: number
+}
+
+/** On the edge towards the bend, turned by so much; in an area the place itself. */
+function findEnd(bend: Place, aim: Target, turn: number): Place {
+  if (aim.kind === 'dot') return aim
+  const angle = Math.atan2(bend.y - aim.y, bend.x - aim.x) + turn
+  return { x: aim.x + aim.radius * Math.cos(angle), y: aim.y + aim.radius * Math.sin(angle) }
+}
+
 function createBox({ width, height }: CalloutRequest, { left, top }: Slot): Box {
   return { left, top, right: left + width, bottom: top + height }
 }
 
-function findBend({ side }: Slot, box: Box): { x: number; y: number } {
+function findBend({ side }: Slot, box: Box): Place {
   return {
     x: side === 'left' ? box.left - space - shoulder : box.right + space + shoulder,
     y: box.top + firstLine,

@@ -115,24 +115,19 @@ function placeWords(
   }
 }
 
-/** The outermost point of the outline on the line through a point along v. */
+/**
+ * The outermost point of the outline on the line through a point along the unit vector v. From outside, every step goes as
+ * far as the outline is away, so it never passes the face. A line that misses the outline ends at its lowest place.
+ */
 export function findFace(outline: Outline, from: Point, [vx, vy]: Point): Point {
   const { least, greatest } = computeExtent(outline, vx, vy)
   const start = from[0] * vx + from[1] * vy
-  const reach = greatest - least
   const at = (t: number): Point => [from[0] + (t - start) * vx, from[1] + (t - start) * vy]
-  // Down from outside to the first point within, then halving between the two.
-  const steps = 200
-  let outside = greatest + 0.01 * reach
-  let inside = outside
-  for (let i = 1; i <= steps && computeClearance(outline, at(inside)) < 0; i++) {
-    outside = inside
-    inside = greatest + 0.01 * reach - (i * 1.02 * reach) / steps
+  let t = greatest + 1
+  for (let i = 0; i < 200 && t > least; i++) {
+    const away = -computeClearance(outline, at(t))
+    if (away < 1e-9) break
+    t -= away
   }
-  for (let i = 0; i < 30; i++) {
-    const middle = (outside + inside) / 2
-    if (computeClearance(outline, at(middle)) < 0) outside = middle
-    else inside = middle
-  }
-  return at(inside)
+  return at(t)
 }
