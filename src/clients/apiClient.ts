@@ -108,15 +108,20 @@ async function call<T>(method: Method, path: string, options: CallOptions = {}):
   const response = await reach(method, path, options)
   if (response.status === 204) return undefined as T
   const body: unknown = await response.json().catch((cause: unknown) => {
-    throw new ApiError('unreadable', 'The server gave an answer that cannot be read. Try again.', {
-      status: response.status,
-      cause,
-    })
+    // The answer began and broke off, or it is not ours: a gateway's own page, say.
+    throw cause instanceof SyntaxError ? unreadable(response.status, cause) : unreachable(method, cause)
   })
   if (response.ok) return body as T
-  const { code, message, ...details } = (body as ErrorBody).error
+  if (!isErrorBody(body)) throw unreadable(response.status, body)
+  const { code, message, ...details } = body.error
   if (code === 'not-signed-in' && path !== paths.session) onSignedOut?.()
   throw new ApiError(code, message, { status: response.status, ...details })
+}
+
+function isErrorBody(body: unknown): body is ErrorBody {
+  if (typeof body !== 'object' || body === null || !('error' in body)) return false
+  const { error } = body
+  return typeof error === 'object' && error !== null && 'code' in error && 'message' in error
 }
 
 async function reach(method: Method, path: string, { body, revision }: CallOptions): Promise<Response> {
@@ -133,25 +138,32 @@ async function reach(method: Method, path: string, { body, revision }: CallOptio
     })
   try {
     return await attempt()
-  } catch (first) {
-    if (method === 'GET') {
-      await new Promise((resolve) => setTimeout(resolve, retryAfter))
-      try {
-        return await attempt()
-      } catch (cause) {
-        throw unreachable(cause)
-      }
-    }
-    throw unreachable(first)
+  } catch (cause) {
+    // Who has waited long enough is told, not made to wait again.
+    if (method !== 'GET' || isLate(cause)) throw unreachable(method, cause)
+  }
+  await new Promise((resolve) => setTimeout(resolve, retryAfter))
+  try {
+    return await attempt()
+  } catch (cause) {
+    throw unreachable(method, cause)
   }
 }
 
-function unreachable(cause: unknown): ApiError {
-  const late = cause instanceof DOMException && cause.name === 'TimeoutError'
-  const message = late
-    ? 'The server took too long to answer. What you typed is kept; try again.'
-    : 'The server cannot be reached. What you typed is kept; try again when the connection is back.'
-  return new ApiError('unreachable', message, { cause })
+const isLate = (cause: unknown) => cause instanceof DOMException && cause.name === 'TimeoutError'
+
+function unreachable(method: Method, cause: unknown): ApiError {
+  const what = isLate(cause) ? 'The server took too long to answer.' : 'The server cannot be reached.'
+  const way =
+    method === 'GET'
+      ? 'Try again when the connection is back.'
+      : 'What you typed is kept; try again when the connection is back.'
+  return new ApiError('unreachable', `${what} ${way}`, { cause })
+}
+
+function unreadable(status: number, cause: unknown): ApiError {
+  const message = `What answered is not the server of Girdwell, or it failed (status ${status}). Try again.`
+  return new ApiError('unreadable', message, { status, cause })
 }
 
 /** All items of a list, page after page. */

@@ -22,6 +22,8 @@ export function useSubmit<Body, Reply>({ schema, send, done }: SubmitOptions<Bod
   const failure = shallowRef<ApiError | null>(null)
 
   async function submit(body: Body) {
+    // Enter pressed twice is one wish.
+    if (busy.value) return
     const issues = schema ? findFormIssues(schema, body) : []
     failure.value = issues.length > 0 ? new ApiError('invalid', '', { issues }) : null
     if (failure.value) return

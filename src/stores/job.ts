@@ -12,9 +12,12 @@ export const useJobStore = defineStore('job', () => {
   const failure = shallowRef<ApiError | null>(null)
   let wanted = ''
 
+  /** The same job again stays in sight meanwhile; another one is never shown in its place. */
   async function load(jobId: string) {
+    const again = job.value?.id === jobId
     wanted = jobId
-    loading.value = 'loading'
+    if (!again) job.value = null
+    if (!again || loading.value === 'failed') loading.value = 'loading'
     failure.value = null
     try {
       const [one, itsSections, itsMembers] = await Promise.all([
@@ -34,5 +37,14 @@ export const useJobStore = defineStore('job', () => {
     }
   }
 
-  return { job, sections, members, loading, failure, load }
+  /** Nothing of it stays for whoever signs in next on this machine. */
+  function clear() {
+    wanted = ''
+    job.value = null
+    sections.value = []
+    members.value = []
+    loading.value = 'idle'
+  }
+
+  return { job, sections, members, loading, failure, load, clear }
 })

@@ -8,6 +8,8 @@ export const useSessionStore = defineStore('session', () => {
   const user = shallowRef<User | null>(null)
   /** Somebody was signed in and is not any more: sign in again in place, nothing on the page is lost. */
   const interrupted = ref(false)
+  /** Why it is not known who is signed in: the server was not reached. */
+  const unreached = shallowRef<ApiError | null>(null)
   let asked: Promise<void> | null = null
 
   whenSignedOut(() => {
@@ -19,10 +21,14 @@ export const useSessionStore = defineStore('session', () => {
     asked ??= apiClient.getSession().then(
       (known) => {
         user.value = known
+        unreached.value = null
       },
-      (error: unknown) => {
+      (thrown: unknown) => {
         // Not being signed in is an answer; not having reached the server is none, so ask again next time.
-        if (!(error instanceof ApiError && error.code === 'not-signed-in')) asked = null
+        const error = ApiError.from(thrown)
+        const answered = error.code === 'not-signed-in'
+        unreached.value = answered ? null : error
+        if (!answered) asked = null
       },
     )
     return asked
@@ -31,11 +37,17 @@ export const useSessionStore = defineStore('session', () => {
   async function signIn(credentials: SignIn): Promise<void> {
     user.value = await apiClient.signIn(credentials)
     interrupted.value = false
+    unreached.value = null
     asked = Promise.resolve()
   }
 
   async function signOut(): Promise<void> {
     await apiClient.signOut()
+    leave()
+  }
+
+  /** Nobody any more, on this page. */
+  function leave() {
     user.value = null
     interrupted.value = false
   }
@@ -44,5 +56,5 @@ export const useSessionStore = defineStore('session', () => {
     user.value = changed
   }
 
-  return { user, interrupted, ensureKnown, signIn, signOut, wasChanged }
+  return { user, interrupted, unreached, ensureKnown, signIn, signOut, leave, wasChanged }
 })
