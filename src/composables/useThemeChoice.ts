@@ -1,25 +1,49 @@
-import { computed } from 'vue'
+import { computed, ref, watchEffect } from 'vue'
 import { useTheme } from 'vuetify'
 
 export type ThemeName = 'light' | 'dark'
+/** A theme chosen by the person, or whatever the system has at the time. */
+export type ThemeChoice = ThemeName | 'system'
 
 const key = 'girdwell:theme'
 
-/** What the person chose before, else what the system prefers. */
-export function findKeptTheme(): ThemeName {
-  const kept = globalThis.localStorage?.getItem(key)
-  if (kept === 'light' || kept === 'dark') return kept
-  return globalThis.matchMedia?.('(prefers-color-scheme: dark)').matches ? 'dark' : 'light'
+/** What the person chose before, else to follow the system. */
+export function findKeptTheme(): ThemeChoice {
+  try {
+    const kept = globalThis.localStorage?.getItem(key)
+    return kept === 'light' || kept === 'dark' ? kept : 'system'
+  } catch {
+    // Storage is switched off in this browser: the system's theme is a fair answer.
+    return 'system'
+  }
 }
 
-/** The theme in force and the switch to the other one, kept for the next visit. */
+/** The choice in force, and the way to change it; a chosen theme is kept for the next visit. */
 export function useThemeChoice() {
   const theme = useTheme()
-  const name = computed<ThemeName>(() => (theme.global.current.value.dark ? 'dark' : 'light'))
-  const other = computed<ThemeName>(() => (name.value === 'dark' ? 'light' : 'dark'))
-  function switchTheme() {
-    localStorage.setItem(key, other.value)
-    theme.change(other.value)
+  const choice = ref<ThemeChoice>(findKeptTheme())
+  const other = computed<ThemeName>(() => (theme.global.current.value.dark ? 'light' : 'dark'))
+
+  function choose(chosen: ThemeChoice) {
+    choice.value = chosen
+    theme.change(chosen)
+    try {
+      if (chosen === 'system') localStorage.removeItem(key)
+      else localStorage.setItem(key, chosen)
+    } catch {
+      // It holds until the page is left, which is all that a browser without storage can do.
+      return
+    }
   }
-  return { name, other, switchTheme }
+  return { choice, other, choose }
+}
+
+/** The ground behind the page (over-scroll, gaps while loading) takes the theme in force. */
+export function useThemeOfDocument(): void {
+  const theme = useTheme()
+  watchEffect(() => {
+    const dark = theme.global.current.value.dark
+    document.documentElement.classList.toggle('v-theme--dark', dark)
+    document.documentElement.classList.toggle('v-theme--light', !dark)
+  })
 }

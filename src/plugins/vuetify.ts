@@ -45,7 +45,7 @@ export const vuetify = createVuetify({
     VBtn: { rounded: 'sm', ripple: false, flat: true },
     VCard: { flat: true, rounded: 0 },
     VTextField: { variant: 'underlined', density: 'compact', color: 'primary' },
-    VTextarea: { density: 'compact', color: 'primary' },
+    VTextarea: { variant: 'underlined', density: 'compact', color: 'primary' },
     VSelect: { variant: 'underlined', density: 'compact', color: 'primary' },
     VTabs: { color: 'primary', density: 'compact' },
     VCheckbox: { color: 'primary', density: 'compact' },
