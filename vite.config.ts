@@ -33,6 +33,7 @@ export default defineConfig({
           environment: 'happy-dom',
           include: ['tests/dom/**/*.test.ts'],
           setupFiles: ['tests/helpers/domSetup.ts'],
+          testTimeout: 20_000,
           server: { deps: { inline: ['vuetify'] } },
         },
       },

@@ -50,6 +50,32 @@ describe('QuantityField', () => {
     expect(update).not.toHaveBeenCalled()
   })
 
+  it.each(['12,000', '-1,250', '12 ,000'])('does not guess what "%s" means', async (typed) => {
+    const { wrapper, input, type, update } = setup()
+    await type(typed)
+    expect(wrapper.get('[role=alert]').text()).toContain(`found "${typed}", allowed`)
+    expect(input.element.value).toBe(typed)
+    await input.trigger('keydown', { key: 'ArrowUp' })
+    expect(update).not.toHaveBeenCalled()
+  })
+
+  it.each([
+    ['0,125', 125],
+    ['12,5', 12_500],
+    ['1.5e3', 1_500_000],
+  ])('reads %s kN', async (typed, stored) => {
+    const { type, update } = setup()
+    await type(typed)
+    expect(update).toHaveBeenCalledExactlyOnceWith(stored)
+  })
+
+  it.each(['0x10', 'Infinity', '1e', '1,250,000', '.', '--5'])('takes "%s" for no number', async (typed) => {
+    const { wrapper, type, update } = setup()
+    await type(typed)
+    expect(wrapper.get('[role=alert]').text()).toBe(`found "${typed}", allowed a number in kN`)
+    expect(update).not.toHaveBeenCalled()
+  })
+
   it('says which bounds were passed, in the shown unit', async () => {
     const { wrapper, type, update } = setup({ modelValue: 80, kind: 'length', min: 1, max: 200 })
     await type('250')
