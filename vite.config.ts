@@ -56,6 +56,8 @@ export default defineConfig({
           include: ['tests/e2e/**/*.test.ts'],
           globalSetup: ['tests/e2e/globalSetup.ts'],
           fileParallelism: false,
+          // A starved browser is no fault of the product; a fault of the product fails twice.
+          retry: 1,
           testTimeout: 120_000,
           hookTimeout: 120_000,
         },

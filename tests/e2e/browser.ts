@@ -29,7 +29,8 @@ export async function openProfile(
     reducedMotion: 'reduce',
     ...options,
   })
-  context.setDefaultTimeout(15_000)
+  // Generous: a machine that runs other work may starve a browser for seconds.
+  context.setDefaultTimeout(30_000)
   const page = await context.newPage()
   const faults: string[] = []
   page.on('pageerror', (error) => faults.push(`page error: ${error.message}`))
