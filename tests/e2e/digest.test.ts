@@ -1,13 +1,11 @@
-import { readFileSync } from 'node:fs'
 import { fileURLToPath } from 'node:url'
 import { build } from 'esbuild'
 import type { Browser } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, inject, it } from 'vitest'
 import { launchBrowser, openProfile } from './browser.ts'
+import { fixtureDigests, loadDigested } from '../helpers/fixtureDocuments.ts'
 
 const baseUrl = inject('baseUrl')
-const folder = new URL('../fixtures/documents/', import.meta.url)
-const digests: Record<string, string> = JSON.parse(readFileSync(new URL('digests.json', folder), 'utf8'))
 
 /** Reader and digest of the product as one script that a page can run. */
 async function bundleDigest(): Promise<string> {
@@ -40,16 +38,15 @@ describe('digests of the fixtures in a browser', () => {
     const { page, context } = await openProfile(browser)
     await page.goto(`${baseUrl}/sign-in`)
     await page.evaluate(await bundleDigest())
-    const names = Object.keys(digests)
-    expect(names.length).toBeGreaterThan(2)
-    for (const name of names) {
-      const input = JSON.parse(readFileSync(new URL(`${name}.json`, folder), 'utf8'))
+    const entries = Object.entries(fixtureDigests)
+    expect(entries.length).toBeGreaterThan(8)
+    for (const [name, wanted] of entries) {
       const digest = await page.evaluate(
         (document) =>
           (globalThis as typeof globalThis & { digestOf(input: unknown): string }).digestOf(document),
-        input,
+        loadDigested(name),
       )
-      expect(digest).toBe(digests[name])
+      expect(digest, name).toBe(wanted)
     }
     await context.close()
   })

@@ -1,18 +1,44 @@
 import { createHash } from 'node:crypto'
 import { describe, expect, it } from 'vitest'
+import { layouts } from '#shared/catalogue/layouts.ts'
 import type { AnalysisDocument } from '#shared/document/analysisDocument.ts'
 import { computeDigest, toCanonicalJson } from '#shared/document/digest.ts'
-import { fixtureNames, loadFixture, loadInput, readSound } from '../../../helpers/fixtureDocuments.ts'
+import {
+  fixtureDigests,
+  fixtureNames,
+  loadDigested,
+  loadFixture,
+  loadInput,
+  readSound,
+} from '../../../helpers/fixtureDocuments.ts'
 
 const digestOf = (input: unknown) => computeDigest(readSound(input))
 
 describe('the digest', () => {
-  it.each(fixtureNames)('of %s is the one that was made without our packages', (name) => {
-    // tests/fixtures/documents/makeDigests.mjs: own canonical form, node:crypto.
-    const digests = loadFixture('digests') as Record<string, string>
-    expect(digestOf(loadInput(name))).toBe(digests[name])
-    expect(digestOf(loadFixture(`${name}.filled`))).toBe(digests[name])
+  // tests/fixtures/documents/makeDigests.mjs: own defaults and canonical form, node:crypto.
+  it.each(Object.entries(fixtureDigests))(
+    'of %s is the one that was made without our packages',
+    (name, digest) => {
+      expect(digestOf(loadDigested(name))).toBe(digest)
+    },
+  )
+
+  it('stands for every fixture, every layout and every section with exact results', () => {
+    const names = Object.keys(fixtureDigests)
+    expect(names).toEqual(expect.arrayContaining([...fixtureNames]))
+    expect(names.filter((name) => name.startsWith('layout-'))).toHaveLength(layouts.length)
+    expect(names.filter((name) => /^p\d-/.test(name))).toHaveLength(3)
+    for (const name of fixtureNames) {
+      expect(digestOf(loadFixture(`${name}.filled`)), name).toBe(fixtureDigests[name])
+    }
   })
+
+  it.each(layouts.map((layout) => [layout.id, layout] as const))(
+    'of the layout %s is that of its fixture',
+    (id, layout) => {
+      expect(digestOf(layout.create())).toBe(fixtureDigests[`layout-${id}`])
+    },
+  )
 
   it('is sha-256 in hex over the canonical form in UTF-8', () => {
     const document = readSound(loadInput('octagon-hoop'))
