@@ -229,6 +229,32 @@ describe('what a document is refused for, field by field', () => {
     expect(listLines(withField(path, value))).toEqual([line])
   })
 
+  it.each([
+    ['missing', 'section.spirals.0.pitch', undefined],
+    ['wrong-type', 'section.spirals.0.pitch', '80'],
+    ['not-finite', 'analysis.axialLoad', Infinity],
+    ['too-small', 'section.outline.diameter', -1200],
+    ['too-large', 'section.outline.diameter', 1.2e6],
+    ['not-allowed', 'section.spirals.0.form', 'coil'],
+    ['unknown-field', 'section.spirals.0.picth', 80],
+    ['bad-name', 'materials.steels.L ', { law: 'elastic-plastic', yieldStrength: 400 }],
+    ['unknown-format', 'format', 'table/1'],
+  ])('the code %s stands with path, found and allowed', (code, path, value) => {
+    const outcome = readDocument(withField(path, value))
+    expect(outcome).toEqual({
+      status: 'bad',
+      issues: [
+        {
+          path: path.replace('.0', '[0]'),
+          code,
+          message: expect.stringMatching(/./),
+          found: expect.stringMatching(/./),
+          allowed: expect.stringMatching(/./),
+        },
+      ],
+    })
+  })
+
   it('tells everything that is wrong at once', () => {
     const document = withField('section.spirals.0.pitch', 'wide') as { materials: { concrete: object } }
     document.materials.concrete = {}
